@@ -1,0 +1,104 @@
+import { orient2d, orient3d, type Sign } from './orient.ts';
+
+/** Three vertex numbers of a triangle that has an area. */
+export type Corners = readonly [number, number, number];
+
+/**
+ * Whether two triangles have a point in common besides the corners or the edge that they share. Exact; touching counts,
+ * lying on each other counts. Triangles with all three corners in common are not a question for this function.
+ * Equal corners must have equal numbers.
+ *
+ * Two triangles not in one plane meet where an edge of one meets the other. With one shared corner, the part in common
+ * is convex and ends on the side opposite that corner of one or the other, so those two sides decide. With a shared
+ * edge they meet elsewhere only when folded onto each other.
+ */
+export function trianglesMeet(p: Float64Array, s: Corners, t: Corners): boolean {
+  const shared = s.filter((corner) => t.includes(corner));
+  if (shared.length === 2) return foldedTogether(p, shared[0]!, shared[1]!, other(s, shared), other(t, shared));
+  const sideOfT = sides(p, s, t);
+  if (allOnOneSide(sideOfT)) return false;
+  const sideOfS = sides(p, t, s);
+  if (allOnOneSide(sideOfS)) return false;
+  const apex = shared[0];
+  return sideMeets(p, s, t, sideOfS, apex) || sideMeets(p, t, s, sideOfT, apex);
+}
+
+const other = (t: Corners, shared: readonly number[]): number => t.find((corner) => !shared.includes(corner)) ?? t[0];
+
+/** On which side of the plane of `plane` each corner of `t` lies. */
+function sides(p: Float64Array, plane: Corners, t: Corners): [Sign, Sign, Sign] {
+  const [a, b, c] = plane;
+  const side = (d: number): Sign => (d === a || d === b || d === c ? 0 : orient3d(p, a, b, c, d));
+  return [side(t[0]), side(t[1]), side(t[2])];
+}
+
+const allOnOneSide = ([a, b, c]: readonly [Sign, Sign, Sign]): boolean => a !== 0 && a === b && b === c;
+
+/** Whether an edge of `s` (only the one opposite `apex`, if given) meets `t`; `side` is that of the corners of `s`. */
+function sideMeets(p: Float64Array, s: Corners, t: Corners, side: readonly Sign[], apex: number | undefined): boolean {
+  for (let i = 0; i < 3; i++) {
+    const j = (i + 1) % 3;
+    if (s[i] === apex || s[j] === apex) continue;
+    if (segmentMeets(p, s[i]!, s[j]!, t, side[i]!, side[j]!)) return true;
+  }
+  return false;
+}
+
+function segmentMeets(p: Float64Array, from: number, to: number, t: Corners, sideFrom: Sign, sideTo: Sign): boolean {
+  if (sideFrom === 0 && sideTo === 0) return segmentMeetsInPlane(p, from, to, t);
+  if (sideFrom === sideTo) return false;
+  const [a, b, c] = t;
+  const x = orient3d(p, from, to, a, b);
+  const y = orient3d(p, from, to, b, c);
+  const z = orient3d(p, from, to, c, a);
+  return (x >= 0 && y >= 0 && z >= 0) || (x <= 0 && y <= 0 && z <= 0);
+}
+
+function segmentMeetsInPlane(p: Float64Array, from: number, to: number, t: Corners): boolean {
+  const [a, b, c] = t;
+  const axis = viewingAxis(p, t);
+  const turn = orient2d(p, axis, a, b, c);
+  const outside = (edgeFrom: number, edgeTo: number): boolean => orient2d(p, axis, edgeFrom, edgeTo, from) === -turn;
+  if (!outside(a, b) && !outside(b, c) && !outside(c, a)) return true;
+  return (
+    segmentsCross(p, axis, from, to, a, b) ||
+    segmentsCross(p, axis, from, to, b, c) ||
+    segmentsCross(p, axis, from, to, c, a)
+  );
+}
+
+/** An axis along which the triangle is seen with an area. */
+function viewingAxis(p: Float64Array, [a, b, c]: Corners): number {
+  for (let axis = 2; axis > 0; axis--) if (orient2d(p, axis, a, b, c) !== 0) return axis;
+  return 0;
+}
+
+function segmentsCross(p: Float64Array, axis: number, a: number, b: number, c: number, d: number): boolean {
+  const c1 = orient2d(p, axis, a, b, c);
+  const d1 = orient2d(p, axis, a, b, d);
+  const a1 = orient2d(p, axis, c, d, a);
+  const b1 = orient2d(p, axis, c, d, b);
+  if (c1 * d1 < 0 && a1 * b1 < 0) return true;
+  return (
+    (c1 === 0 && inBox(p, a, b, c)) ||
+    (d1 === 0 && inBox(p, a, b, d)) ||
+    (a1 === 0 && inBox(p, c, d, a)) ||
+    (b1 === 0 && inBox(p, c, d, b))
+  );
+}
+
+/** Whether `point`, which is in line with `a` and `b`, lies between them or on one of them. */
+function inBox(p: Float64Array, a: number, b: number, point: number): boolean {
+  for (let axis = 0; axis < 3; axis++) {
+    const [u, v, w] = [p[3 * a + axis]!, p[3 * b + axis]!, p[3 * point + axis]!];
+    if (w < Math.min(u, v) || w > Math.max(u, v)) return false;
+  }
+  return true;
+}
+
+/** Whether triangles on the common edge u, v with the further corners a and b lie on each other. */
+function foldedTogether(p: Float64Array, u: number, v: number, a: number, b: number): boolean {
+  if (orient3d(p, u, v, a, b) !== 0) return false;
+  const axis = viewingAxis(p, [u, v, a]);
+  return orient2d(p, axis, u, v, a) === orient2d(p, axis, u, v, b);
+}

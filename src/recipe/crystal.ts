@@ -1,0 +1,68 @@
+import type { Cell, Metric } from '../crystal/cell.ts';
+import type { Form } from '../crystal/form.ts';
+import type { PointGroup } from '../crystal/point-group.ts';
+import type { Miller, Zone } from '../crystal/spaces.ts';
+import type { Millimetres } from './quantity.ts';
+import type { PrinterProfile } from './schema.ts';
+
+/** A recipe understood: everything that decides the crystal's shape, checked and complete. */
+export interface Crystal {
+  readonly title: string;
+  readonly mineral: MineralFacts | null;
+  readonly group: PointGroup;
+  readonly cell: Cell;
+  readonly metric: Metric;
+  /** In the recipe's order. */
+  readonly forms: readonly CrystalForm[];
+}
+
+export interface MineralFacts {
+  /** Name of the preset, for instance `quartz`. */
+  readonly id: string;
+  readonly name: string;
+  readonly formula: string;
+  readonly habit: string;
+  /** Where the cell comes from. */
+  readonly source: string;
+}
+
+/** A form at its central distance, in the recipe's own unit of length. */
+export interface CrystalForm {
+  readonly form: Form;
+  readonly distance: number;
+  /** The mineral's letter for the form, where it has one. */
+  readonly letter: string | null;
+}
+
+/** How large the object is to be. */
+export type Size =
+  | { readonly kind: 'longest'; readonly length: Millimetres }
+  | { readonly kind: 'along'; readonly zone: Zone; readonly length: Millimetres }
+  | { readonly kind: 'between'; readonly face: Miller; readonly length: Millimetres }
+  | { readonly kind: 'volume'; readonly cubicMillimetres: number }
+  | { readonly kind: 'scale'; readonly millimetresPerUnit: number };
+
+/** Which symmetry axes are to be rods, and how. */
+export interface AxesPlan {
+  readonly orders: readonly number[] | null;
+  readonly directions: readonly Zone[] | null;
+  readonly fit: 'fused' | 'separate';
+  readonly diameter: Millimetres;
+  /** How far a rod stands out of the crystal, its terminal included. */
+  readonly reach: Millimetres;
+}
+
+export interface PrintPlan {
+  /** Null when the recipe states none; `make` then takes `USUAL_SIZE`. */
+  readonly size: Size | null;
+  readonly axes: AxesPlan | null;
+  readonly printer: PrinterProfile;
+  readonly stl: 'binary' | 'text';
+  readonly file: string | null;
+}
+
+/** What one recipe says, in full. */
+export interface Resolved {
+  readonly crystal: Crystal;
+  readonly print: PrintPlan;
+}

@@ -1,0 +1,66 @@
+import { parseFace, parseZone, readOptions } from '../crystal/indices.ts';
+import type { PointGroup } from '../crystal/point-group.ts';
+import { type Zone, zone } from '../crystal/spaces.ts';
+import type { AxesPlan, Size } from './crystal.ts';
+import { type Millimetres, mm, QuantityError, readLength, readVolume } from './quantity.ts';
+import type { AxesInput, PrinterProfile, SizeInput, ZoneInput } from './schema.ts';
+
+/** Longest extent of a model whose recipe states no size, millimetres: within the usual hand size of 60 to 80 mm. */
+export const USUAL_SIZE: Size = { kind: 'longest', length: mm(70) };
+export const LARGEST_SIZE = 10_000;
+const USUAL_REACH = 12;
+
+/** A direction: an edge of the cell by its letter, or a zone symbol. @throws CrystalError */
+export function readDirection(input: ZoneInput, group: PointGroup | undefined): Zone {
+  const edge = { a: zone(1, 0, 0), b: zone(0, 1, 0), c: zone(0, 0, 1) }[String(input).trim().toLowerCase()];
+  return edge ?? parseZone(Array.isArray(input) ? input : String(input), readOptions(group?.axes ?? 'hexagonal'));
+}
+
+/** Size as a recipe or a flag states it. @throws CrystalError, QuantityError */
+export function readSize(input: SizeInput, group: PointGroup | undefined): Size {
+  if (typeof input !== 'object') return { kind: 'longest', length: bounded(readLength(input)) };
+  if ('longest' in input) return { kind: 'longest', length: bounded(readLength(input.longest)) };
+  if ('along' in input)
+    return { kind: 'along', zone: readDirection(input.along, group), length: bounded(readLength(input.length)) };
+  if ('between' in input) {
+    const options = readOptions(group?.axes ?? 'hexagonal');
+    const face = parseFace(Array.isArray(input.between) ? input.between : String(input.between), options);
+    return { kind: 'between', face, length: bounded(readLength(input.length)) };
+  }
+  if ('volume' in input) return { kind: 'volume', cubicMillimetres: positive(readVolume(input.volume), 'a volume') };
+  return { kind: 'scale', millimetresPerUnit: positive(input.scale, 'a scale') };
+}
+
+function positive(value: number, what: string): number {
+  if (value > 0 && Number.isFinite(value)) return value;
+  throw new QuantityError(`${what} of ${value} leaves nothing to print.`, 'Give a positive number.');
+}
+
+function bounded(length: Millimetres): Millimetres {
+  positive(length, 'a size');
+  if (length <= LARGEST_SIZE) return length;
+  throw new QuantityError(
+    `${length} mm is larger than ${LARGEST_SIZE} mm (10 m).`,
+    'Sizes are in millimetres; models for the hand are 50 to 100.',
+  );
+}
+
+/** Axes as a recipe states them; null for none. @throws CrystalError, QuantityError */
+export function readAxes(input: AxesInput, group: PointGroup | undefined, printer: PrinterProfile): AxesPlan | null {
+  if (input === false) return null;
+  const given = typeof input === 'object' ? input : {};
+  const unknown = given.orders?.find((order) => ![2, 3, 4, 6, -3, -4, -6].includes(order));
+  if (unknown !== undefined)
+    throw new QuantityError(
+      `no crystal has an axis of order ${unknown}.`,
+      'Orders are 2, 3, 4 and 6; -3, -4 and -6 choose rotoinversion axes only.',
+    );
+  const chosen = given.directions?.map((direction) => readDirection(direction, group));
+  return {
+    orders: given.orders ?? null,
+    directions: chosen ?? null,
+    fit: given.fit ?? 'fused',
+    diameter: bounded(given.diameter === undefined ? mm(printer.rod.diameter) : readLength(given.diameter)),
+    reach: bounded(given.reach === undefined ? mm(USUAL_REACH) : readLength(given.reach)),
+  };
+}

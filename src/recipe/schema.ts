@@ -1,0 +1,132 @@
+import { z } from 'zod';
+
+/** More forms than any crystal shows, and few enough to answer at once. */
+export const MOST_FORMS = 250;
+
+const lengthText = z.union([z.number(), z.string()]).describe('millimetres, or text with mm, cm, m or in');
+const faceText = z
+  .union([z.string(), z.number(), z.array(z.number()).min(3).max(4)])
+  .describe('face indices: "111", "10-11", "1 0 -1 12", [1, 0, -1, 1], or a letter of the mineral');
+const zoneText = z
+  .union([z.string(), z.number(), z.array(z.number()).min(3).max(4)])
+  .describe('a direction: a, b, c, "[uvw]" or [u, v, w]');
+
+const angle = z.number().optional().describe('degrees');
+const edge = z.number().optional().describe('ångström');
+
+const cell = z
+  .strictObject({
+    a: edge,
+    b: edge,
+    c: edge,
+    ratios: z.string().optional().describe('axial ratios a:b:c of older books, in place of a, b and c'),
+    alpha: angle,
+    beta: angle,
+    gamma: angle,
+  })
+  .describe('what the crystal system fixes may be left out');
+
+const formEntry = z.strictObject({
+  face: faceText,
+  distance: z.number().describe('central distance, relative to the other forms'),
+});
+
+const sizes = [
+  z.strictObject({ longest: lengthText }),
+  z.strictObject({ along: zoneText, length: lengthText }),
+  z.strictObject({ between: faceText, length: lengthText }),
+  z.strictObject({ volume: z.union([z.number(), z.string()]).describe('mm³, or text with mm3, cm3 or ml') }),
+  z.strictObject({ scale: z.number().describe('millimetres for each unit of distance') }),
+] as const;
+const size = z.union([lengthText, ...sizes]).describe('a length alone is the longest extent');
+
+const chosenAxes = z.strictObject({
+  orders: z.array(z.number()).optional().describe('2, 3, 4, 6; negative: only rotoinversion axes'),
+  directions: z.array(zoneText).optional(),
+  fit: z.enum(['fused', 'separate']).optional(),
+  diameter: lengthText.optional(),
+  reach: lengthText.optional().describe('how far a rod stands out of the crystal'),
+});
+const axes = z
+  .union([z.boolean(), z.literal('all'), chosenAxes])
+  .describe('symmetry axes as rods; true or "all" for every axis');
+
+const print = z.strictObject({
+  size: size.optional(),
+  axes: axes.optional(),
+  printer: z.string().optional().describe('a printer profile'),
+  stl: z.enum(['binary', 'text']).optional(),
+  file: z.string().optional().describe('file name without ending'),
+});
+
+/** What a person may write. Meaning is checked afterwards, in `resolve.ts`. */
+export const recipeSchema = z.strictObject({
+  title: z.string().max(120).optional(),
+  mineral: z.string().optional().describe('a mineral preset'),
+  habit: z.string().optional().describe("one of the mineral's habits"),
+  pointGroup: z.union([z.string(), z.number()]).optional().describe('Hermann–Mauguin or Schoenflies symbol'),
+  cell: cell.optional(),
+  forms: z.array(formEntry).max(MOST_FORMS).optional(),
+  print: print.optional(),
+  note: z.string().optional(),
+});
+
+/** The keys known at each place of a recipe, places in lists left out. */
+export const KNOWN_KEYS: Readonly<Record<string, readonly string[]>> = {
+  '': Object.keys(recipeSchema.shape),
+  cell: Object.keys(cell.shape),
+  forms: Object.keys(formEntry.shape),
+  print: Object.keys(print.shape),
+  'print.size': [...new Set(sizes.flatMap(({ shape }) => Object.keys(shape)))],
+  'print.axes': Object.keys(chosenAxes.shape),
+};
+
+export type RecipeInput = z.input<typeof recipeSchema>;
+export type CellInput = z.input<typeof cell>;
+export type SizeInput = z.input<typeof size>;
+export type AxesInput = z.input<typeof axes>;
+export type FaceInput = z.input<typeof faceText>;
+export type ZoneInput = z.input<typeof zoneText>;
+
+const citation = z.string().min(10);
+
+/** A mineral's file in `presets/minerals`. */
+export const mineralSchema = z.strictObject({
+  name: z.string(),
+  formula: z.string(),
+  family: z.string().optional(),
+  pointGroup: z.string(),
+  cell,
+  source: citation.describe('where the cell comes from'),
+  note: citation.describe('where the forms come from, and that the distances are chosen for looks'),
+  letters: z.record(z.string(), z.string()),
+  habits: z.record(z.string(), z.strictObject({ about: z.string(), forms: z.array(formEntry).min(1) })),
+});
+export type MineralPreset = z.infer<typeof mineralSchema>;
+
+/** A set's file in `presets/sets`: many small recipes under one heading. */
+export const setSchema = z.strictObject({
+  name: z.string(),
+  source: citation,
+  note: citation,
+  recipes: z.record(z.string(), recipeSchema),
+});
+export type SetPreset = z.infer<typeof setSchema>;
+
+/** A printer's file in `presets/printers`. All lengths in millimetres. */
+export const printerSchema = z.strictObject({
+  name: z.string(),
+  source: citation,
+  bed: z.tuple([z.number(), z.number(), z.number()]),
+  rod: z.strictObject({
+    diameter: z.number().describe('usual rod'),
+    smallest: z.number().describe('thinnest rod that prints'),
+    clearance: z.number().describe('bore diameter minus rod diameter, for a push fit to be glued'),
+  }),
+});
+export type PrinterProfile = z.infer<typeof printerSchema>;
+
+/** The recipe as JSON Schema, for editors that complete and check YAML while one types. */
+export function recipeJsonSchema(): object {
+  return { title: 'Goniolith recipe', ...z.toJSONSchema(recipeSchema, { io: 'input' }) };
+}

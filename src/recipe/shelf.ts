@@ -1,0 +1,82 @@
+import { nearest } from '../crystal/nearest.ts';
+import { type Problem, RecipeError } from './problem.ts';
+import type { MineralPreset, PrinterProfile, SetPreset } from './schema.ts';
+import { readText, type Written } from './text.ts';
+
+/** Where presets are kept: a folder of YAML files, or whatever a browser has in its place. */
+export interface Shelf {
+  /** Names of the files of one kind, without ending, in alphabetical order. */
+  list(kind: PresetKind): readonly string[];
+  /** The text of one file, or undefined when there is none of that name. */
+  read(kind: PresetKind, name: string): string | undefined;
+}
+
+export type PresetKind = 'minerals' | 'sets' | 'printers';
+
+/** A shelf with nothing on it, for recipes that give everything themselves. */
+export const EMPTY_SHELF: Shelf = { list: () => [], read: () => undefined };
+
+interface Kinds {
+  minerals: MineralPreset;
+  sets: SetPreset;
+  printers: PrinterProfile;
+}
+
+/**
+ * A preset file as written, or null when the shelf has none of that name. The files belong to the project and a test
+ * checks each against its schema, so what is read here is taken at its word.
+ */
+export function preset<K extends PresetKind>(shelf: Shelf, kind: K, name: string): Kinds[K] | null {
+  const text = /^\w[\w.-]*$/.test(name) ? shelf.read(kind, name) : undefined;
+  return text === undefined ? null : (readText(text, `${kind}/${name}`).value as Kinds[K]);
+}
+
+/**
+ * The recipe that a preset's name stands for: `quartz`, `pyrite/pyritohedron`, or `32-groups/m-3m` from a set.
+ * @throws RecipeError with the nearest names when there is none
+ */
+export function presetRecipe(shelf: Shelf, id: string): Written {
+  const [name = '', part, ...more] = id.trim().toLowerCase().split('/');
+  const origin = { name: id };
+  const refuse = (problem: Omit<Problem, 'path'>): never => {
+    throw new RecipeError(origin, [{ ...problem, path: [] }]);
+  };
+  const mineral = preset(shelf, 'minerals', name);
+  if (mineral && more.length === 0) {
+    if (part === undefined || part in mineral.habits)
+      return { value: { mineral: name, ...(part !== undefined && { habit: part }) }, origin };
+    return refuse({ code: 'unknown-habit', ...unknownHabit(name, part, Object.keys(mineral.habits)) });
+  }
+  const set = preset(shelf, 'sets', name);
+  if (set && part !== undefined && more.length === 0) {
+    const recipe = set.recipes[part];
+    if (recipe) return { value: recipe, origin };
+    return refuse({
+      code: 'unknown-mineral',
+      message: `the set ${name} has no "${part}".`,
+      hint: `Did you mean ${either(nearest(part, Object.keys(set.recipes), 4))}?`,
+    });
+  }
+  if (set)
+    return refuse({
+      code: 'unknown-mineral',
+      message: `${name} is a set of ${Object.keys(set.recipes).length} crystals.`,
+      hint: `Name one of them: ${name}/${Object.keys(set.recipes)[0]}; \`goniolith presets ${name}\` lists them.`,
+    });
+  return refuse({ code: 'unknown-mineral', ...unknownMineral(shelf, name) });
+}
+
+export const unknownMineral = (shelf: Shelf, name: string) => ({
+  message: `no mineral "${name}" among the presets.`,
+  hint: `Did you mean ${either(nearest(name, shelf.list('minerals'), 3))}? \`goniolith presets\` lists all; a recipe can also give pointGroup, cell and forms itself.`,
+});
+
+export const unknownHabit = (mineral: string, habit: string, known: readonly string[]) => ({
+  message: `${mineral} has no habit "${habit}" here.`,
+  hint: `It has ${either(known, 'and')}.`,
+});
+
+/** "a, b or c". */
+export function either(words: readonly string[], joint: 'or' | 'and' = 'or'): string {
+  return words.length < 2 ? (words[0] ?? 'nothing') : `${words.slice(0, -1).join(', ')} ${joint} ${words.at(-1)}`;
+}

@@ -1,0 +1,138 @@
+import type { z } from 'zod';
+import { nearest } from '../crystal/nearest.ts';
+import type { Path, Problem } from './problem.ts';
+import { KNOWN_KEYS, MOST_FORMS, recipeSchema } from './schema.ts';
+
+type Issue = z.core.$ZodIssue;
+
+/** What in a recipe is not of the shape that a recipe has: unknown keys, words where numbers belong, missing parts. */
+export function structureProblems(value: unknown): Problem[] {
+  const read = recipeSchema.safeParse(value);
+  return read.success ? [] : read.error.issues.flatMap((issue) => toProblems(issue, value));
+}
+
+function toProblems(issue: Issue, root: unknown): Problem[] {
+  const path = issue.path.filter((key): key is string | number => typeof key !== 'symbol');
+  switch (issue.code) {
+    case 'unrecognized_keys':
+      return issue.keys.map((key) => unknownKey(path, key));
+    case 'invalid_union':
+      return [bestOfUnion(issue.errors, path, root)];
+    case 'too_big':
+      return [tooBig(path, root)];
+    case 'invalid_value':
+      return [
+        {
+          code: 'wrong-kind',
+          message: `${told(valueAt(root, path))} is not one of the words known here.`,
+          hint: `Use ${issue.values.map(String).join(' or ')}.`,
+          path,
+        },
+      ];
+    default:
+      return [wrongKind(path, root)];
+  }
+}
+
+function unknownKey(path: Path, key: string): Problem {
+  const known = keysAt(path);
+  const [guess] = nearest(key, known, 1);
+  const place = path.length ? `in ${path.filter((part) => typeof part === 'string').join(' › ')}` : 'in a recipe';
+  return {
+    code: 'unknown-key',
+    message: `"${key}" means nothing ${place}.`,
+    hint: `${guess ? `Did you mean ${guess}? ` : ''}Known here: ${known.join(', ')}.`,
+    path: [...path, `?${key}`],
+  };
+}
+
+/** Of the ways to write a value, the one that its own keys point at; for plain values a general sentence. */
+function bestOfUnion(errors: readonly (readonly Issue[])[], path: Path, root: unknown): Problem {
+  const nested = errors
+    .filter((issues) => issues.every(({ code }) => code !== 'invalid_type') || issues.some((i) => i.path.length > 0))
+    .sort((a, b) => a.length - b.length)[0];
+  const [issue] = nested ?? [];
+  if (issue && typeof valueAt(root, path) === 'object') {
+    const inner = toProblems({ ...issue, path: [...path, ...issue.path] }, root)[0];
+    if (inner && inner.code !== 'wrong-kind') return inner;
+  }
+  return wrongKind(path, root);
+}
+
+function tooBig(path: Path, root: unknown): Problem {
+  const value = valueAt(root, path);
+  if (path[0] === 'forms' && path.length === 1 && Array.isArray(value))
+    return {
+      code: 'too-large',
+      message: `${value.length} forms are more than the ${MOST_FORMS} that a recipe may have.`,
+      hint: 'Keep the forms that show on the crystal.',
+      path,
+    };
+  return { code: 'wrong-kind', message: `${told(value)} is too long here.`, path };
+}
+
+function wrongKind(path: Path, root: unknown): Problem {
+  const value = valueAt(root, path);
+  const what = EXPECTED[String(path.filter((key) => typeof key === 'string').at(-1) ?? '')];
+  if (value === undefined || value === null) {
+    const key = String(path.at(-1));
+    const owner = path.length > 1 ? ` here` : '';
+    return {
+      code: key === 'distance' ? 'distance' : 'missing',
+      message: `${key === 'undefined' ? 'the recipe' : key} is missing${owner}.`,
+      hint: `Give ${what ?? 'it'}.`,
+      path,
+    };
+  }
+  const message =
+    path.length === 0
+      ? `a recipe is a list of keys and values, not ${told(value)}.`
+      : `${told(value)} cannot be read as ${String(path.at(-1))}.`;
+  return {
+    code: path.at(-1) === 'distance' ? 'distance' : 'wrong-kind',
+    message,
+    hint: `Give ${what ?? 'keys such as mineral, pointGroup, cell, forms, print'}.`,
+    path,
+  };
+}
+
+const EXPECTED: Readonly<Record<string, string>> = {
+  distance: 'a positive number, the central distance relative to the other forms',
+  face: 'face indices such as "111", "10-11" or [1, 0, -1, 1], in quotes',
+  forms: 'a list such as  - { face: "111", distance: 1 }',
+  cell: 'a, b, c in ångström and alpha, beta, gamma in degrees, as far as the system leaves them free',
+  pointGroup: 'a symbol such as m-3m, "321" or D3d',
+  size: 'a length (70, "7 cm"), or one of longest; along and length; between and length; volume; scale',
+  axes: 'true, "all", or orders, directions, fit, diameter, reach',
+  orders: 'a list of 2, 3, 4, 6 (negative: only rotoinversion axes)',
+  directions: 'a list such as ["[001]", "[110]"]',
+  fit: 'fused or separate',
+  mineral: 'the name of a mineral preset',
+  habit: "one of the mineral's habits",
+  printer: 'the name of a printer profile, such as fdm-0.4',
+  print: 'keys such as size, axes, printer, stl, file',
+  a: 'a length in ångström',
+  b: 'a length in ångström',
+  c: 'a length in ångström',
+  alpha: 'an angle in degrees',
+  beta: 'an angle in degrees',
+  gamma: 'an angle in degrees',
+  ratios: 'axial ratios such as "0.5:1:0.7"',
+  scale: 'a number: millimetres for each unit of distance',
+};
+
+function keysAt(path: Path): readonly string[] {
+  return KNOWN_KEYS[path.filter((key) => typeof key === 'string').join('.')] ?? [];
+}
+
+function valueAt(root: unknown, path: Path): unknown {
+  return path.reduce<unknown>((value, key) => {
+    if (typeof value !== 'object' || value === null) return undefined;
+    return Object.entries(value).find(([name]) => name === String(key))?.[1];
+  }, root);
+}
+
+function told(value: unknown): string {
+  const text = JSON.stringify(value) ?? String(value);
+  return text.length > 40 ? `${text.slice(0, 37)}…` : text;
+}
