@@ -1,5 +1,6 @@
 import type { Mesh } from '../print/mesh.ts';
 import { Findings, placeOfTriangle } from './findings.ts';
+import { numberRows } from './number-rows.ts';
 
 /**
  * A triangle counts as having no area when its height over its longest edge is at most this part of that edge. Rounding
@@ -45,21 +46,24 @@ function hasArea(p: Float64Array, a: number, b: number, c: number): boolean {
 /** Later triangles on the same three points. Flat ones are left out: they are reported already. */
 function findDuplicates(mesh: Mesh, same: Uint32Array, flat: Uint8Array): Findings {
   const found = new Findings();
-  const byLeast = new Map<number, number[]>();
-  const corners = (t: number): number[] =>
-    [0, 1, 2].map((i) => same[mesh.triangles[3 * t + i]!]!).sort((a, b) => a - b);
-  const keys = new Float64Array(flat.length);
-  for (let t = 0; t < flat.length; t++) {
-    if (flat[t] === 1) continue;
-    const [a, b, c] = corners(t);
-    keys[t] = b! * 2 ** 26 + c!; // told apart as long as vertex numbers stay below 2^26; else compared again below
-    const known = byLeast.get(a!);
-    if (known === undefined) byLeast.set(a!, [t]);
-    else {
-      const twin = known.find((u) => keys[u] === keys[t] && String(corners(u)) === String([a, b, c]));
-      if (twin === undefined) known.push(t);
-      else found.add(() => ({ ...placeOfTriangle(mesh, t), triangles: [twin, t] }));
-    }
+  const { numbers, firsts } = numberRows(sortedCorners(mesh, same), 3);
+  for (let t = 0; t < numbers.length; t++) {
+    const twin = firsts[numbers[t]!]!;
+    if (twin !== t && flat[t] === 0) found.add(() => ({ ...placeOfTriangle(mesh, t), triangles: [twin, t] }));
   }
   return found;
+}
+
+/** The corners of each triangle as points, least number first. */
+function sortedCorners({ triangles }: Mesh, same: Uint32Array): Int32Array {
+  const sorted = new Int32Array(triangles.length);
+  for (let i = 0; i < triangles.length; i += 3) {
+    const a = same[triangles[i]!]!;
+    const b = same[triangles[i + 1]!]!;
+    const c = same[triangles[i + 2]!]!;
+    sorted[i] = Math.min(a, b, c);
+    sorted[i + 2] = Math.max(a, b, c);
+    sorted[i + 1] = a + b + c - sorted[i]! - sorted[i + 2]!;
+  }
+  return sorted;
 }

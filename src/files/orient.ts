@@ -54,13 +54,22 @@ export function orient3d(p: Float64Array, a: number, b: number, c: number, d: nu
 export function orient2d(p: Float64Array, axis: number, a: number, b: number, c: number): Sign {
   const u = axis === 2 ? 0 : axis + 1;
   const v = u === 2 ? 0 : u + 1;
-  const left = (p[3 * b + u]! - p[3 * a + u]!) * (p[3 * c + v]! - p[3 * a + v]!);
-  const right = (p[3 * b + v]! - p[3 * a + v]!) * (p[3 * c + u]! - p[3 * a + u]!);
+  const bu = p[3 * b + u]! - p[3 * a + u]!;
+  const bv = p[3 * b + v]! - p[3 * a + v]!;
+  const cu = p[3 * c + u]! - p[3 * a + u]!;
+  const cv = p[3 * c + v]! - p[3 * a + v]!;
+  if ((bu === 0 || cv === 0) && (bv === 0 || cu === 0)) return 0; // both products are exactly zero
+  const left = bu * cv;
+  const right = bv * cu;
   const determinant = left - right;
   const size = Math.abs(left) + Math.abs(right);
   if (size > TOO_SMALL && Math.abs(determinant) > BOUND_2D * size) return determinant > 0 ? 1 : -1;
 
-  const [au, av, bu, bv, cu, cv] = wholeNumbers(p, [3 * a + u, 3 * a + v, 3 * b + u, 3 * b + v, 3 * c + u, 3 * c + v]);
+  return exactOrient2d(p, 3 * a + u, 3 * a + v, 3 * b + u, 3 * b + v, 3 * c + u, 3 * c + v);
+}
+
+function exactOrient2d(p: Float64Array, ...places: readonly number[]): Sign {
+  const [au, av, bu, bv, cu, cv] = wholeNumbers(p, places);
   return signOf((bu! - au!) * (cv! - av!) - (bv! - av!) * (cu! - au!));
 }
 

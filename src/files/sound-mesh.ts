@@ -41,3 +41,9 @@ export function assertFinite(positions: Float32Array | Float64Array): void {
     );
   }
 }
+
+/** @throws FileError `empty` */
+export function assertNotEmpty(mesh: Mesh): void {
+  if (mesh.triangles.length > 0) return;
+  throw new FileError('empty', 'There is no triangle to write.', 'Check the part that this file was made for.');
+}

@@ -7,3 +7,11 @@ export const STL_HEADER_BYTES = 80;
 /** Header and count: where the first facet begins. */
 export const STL_FACETS_START = STL_HEADER_BYTES + 4;
 export const STL_FACET_BYTES = 50;
+
+/** Facets as they follow each other in a file. */
+export interface Facets {
+  /** Three numbers a facet. */
+  readonly normals: Float32Array;
+  /** Nine numbers a facet, in memory of its own. */
+  readonly corners: Float32Array;
+}

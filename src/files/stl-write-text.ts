@@ -1,8 +1,8 @@
 import type { Mesh } from '../print/mesh.ts';
 import { asciiTitle } from './ascii.ts';
 import { decimalFloat32 } from './decimal.ts';
-import { positionsFloat32 } from './sound-mesh.ts';
-import { assertNotEmpty, fillNormals } from './stl-write.ts';
+import { fillNormals } from './facet-normals.ts';
+import { assertNotEmpty, positionsFloat32 } from './sound-mesh.ts';
 
 /**
  * A text STL file of the mesh, in millimetres: the binary file's numbers as the shortest decimals that read back as the

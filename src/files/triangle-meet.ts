@@ -5,25 +5,29 @@ export type Corners = readonly [number, number, number];
 
 /**
  * Whether two triangles have a point in common besides the corners or the edge that they share. Exact; touching counts,
- * lying on each other counts. Triangles with all three corners in common are not a question for this function.
- * Equal corners must have equal numbers.
+ * lying on each other counts, but not for triangles with all three corners in common. Equal corners must have equal
+ * numbers.
  *
  * Two triangles not in one plane meet where an edge of one meets the other. With one shared corner, the part in common
  * is convex and ends on the side opposite that corner of one or the other, so those two sides decide. With a shared
  * edge they meet elsewhere only when folded onto each other.
  */
 export function trianglesMeet(p: Float64Array, s: Corners, t: Corners): boolean {
-  const shared = s.filter((corner) => t.includes(corner));
-  if (shared.length === 2) return foldedTogether(p, shared[0]!, shared[1]!, other(s, shared), other(t, shared));
+  const [a, b, c] = s;
+  const [hasA, hasB, hasC] = [isCorner(t, a), isCorner(t, b), isCorner(t, c)];
+  if (hasA && hasB) return !hasC && foldedTogether(p, a, b, c, t);
+  if (hasB && hasC) return foldedTogether(p, b, c, a, t);
+  if (hasC && hasA) return foldedTogether(p, c, a, b, t);
   const sideOfT = sides(p, s, t);
   if (allOnOneSide(sideOfT)) return false;
   const sideOfS = sides(p, t, s);
   if (allOnOneSide(sideOfS)) return false;
-  const apex = shared[0];
+  if (inPlane(sideOfS) && (edgeDivides(p, s, t) || edgeDivides(p, t, s))) return false;
+  const apex = hasA ? a : hasB ? b : hasC ? c : undefined;
   return sideMeets(p, s, t, sideOfS, apex) || sideMeets(p, t, s, sideOfT, apex);
 }
 
-const other = (t: Corners, shared: readonly number[]): number => t.find((corner) => !shared.includes(corner)) ?? t[0];
+const isCorner = (t: Corners, vertex: number): boolean => t[0] === vertex || t[1] === vertex || t[2] === vertex;
 
 /** On which side of the plane of `plane` each corner of `t` lies. */
 function sides(p: Float64Array, plane: Corners, t: Corners): [Sign, Sign, Sign] {
@@ -33,6 +37,22 @@ function sides(p: Float64Array, plane: Corners, t: Corners): [Sign, Sign, Sign] 
 }
 
 const allOnOneSide = ([a, b, c]: readonly [Sign, Sign, Sign]): boolean => a !== 0 && a === b && b === c;
+
+const inPlane = ([a, b, c]: readonly [Sign, Sign, Sign]): boolean => a === 0 && b === 0 && c === 0;
+
+/** Whether, of two triangles in one plane, all of `t` but a common corner lies strictly beyond one edge of `s`. */
+function edgeDivides(p: Float64Array, s: Corners, t: Corners): boolean {
+  const axis = viewingAxis(p, s);
+  const beyond = -orient2d(p, axis, s[0], s[1], s[2]);
+  for (let i = 0; i < 3; i++) {
+    const from = s[i]!;
+    const to = s[(i + 1) % 3]!;
+    const outside = (corner: number): boolean =>
+      corner === from || corner === to || orient2d(p, axis, from, to, corner) === beyond;
+    if (outside(t[0]) && outside(t[1]) && outside(t[2])) return true;
+  }
+  return false;
+}
 
 /** Whether an edge of `s` (only the one opposite `apex`, if given) meets `t`; `side` is that of the corners of `s`. */
 function sideMeets(p: Float64Array, s: Corners, t: Corners, side: readonly Sign[], apex: number | undefined): boolean {
@@ -96,8 +116,9 @@ function inBox(p: Float64Array, a: number, b: number, point: number): boolean {
   return true;
 }
 
-/** Whether triangles on the common edge u, v with the further corners a and b lie on each other. */
-function foldedTogether(p: Float64Array, u: number, v: number, a: number, b: number): boolean {
+/** Whether the triangle u, v, a lies on the triangle t, which has the edge u, v too. */
+function foldedTogether(p: Float64Array, u: number, v: number, a: number, t: Corners): boolean {
+  const b = t[0] !== u && t[0] !== v ? t[0] : t[1] !== u && t[1] !== v ? t[1] : t[2];
   if (orient3d(p, u, v, a, b) !== 0) return false;
   const axis = viewingAxis(p, [u, v, a]);
   return orient2d(p, axis, u, v, a) === orient2d(p, axis, u, v, b);

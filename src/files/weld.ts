@@ -1,6 +1,6 @@
 import type { Mesh } from '../print/mesh.ts';
+import { numberRows } from './number-rows.ts';
 import { positionsFloat32 } from './sound-mesh.ts';
-import { weldBits } from './weld-bits.ts';
 
 /**
  * The mesh as a file holds it: positions rounded to float32 without negative zeros, equal positions made one vertex,
@@ -10,9 +10,10 @@ import { weldBits } from './weld-bits.ts';
  * @throws FileError `badMesh`, `notFinite`
  */
 export function weldFloat32(mesh: Mesh): Mesh {
-  const { points, numbers } = weldBits(positionsFloat32(mesh));
+  const rounded = positionsFloat32(mesh);
+  const { numbers, firsts } = numberRows(new Int32Array(rounded.buffer), 3);
   const triangles = new Uint32Array(mesh.triangles.length);
-  const used = new Uint8Array(points.length / 3);
+  const used = new Uint8Array(firsts.length);
   let end = 0;
   for (let i = 0; i < triangles.length; i += 3) {
     const a = numbers[mesh.triangles[i]!]!;
@@ -24,17 +25,17 @@ export function weldFloat32(mesh: Mesh): Mesh {
     triangles[end++] = c;
     used[a] = used[b] = used[c] = 1;
   }
-  return withoutUnused(points, triangles.slice(0, end), used);
+  return keepUsed(rounded, firsts, triangles.slice(0, end), used);
 }
 
-/** Closes the gaps that unused vertices leave; renumbers `triangles`, which must be a fresh array. */
-function withoutUnused(points: Float32Array, triangles: Uint32Array, used: Uint8Array): Mesh {
-  const renumbered = new Uint32Array(used.length);
-  const positions = new Float64Array(points.length);
+/** The vertices in use under new numbers; writes these into `triangles`, which must be a fresh array. */
+function keepUsed(rounded: Float32Array, firsts: Uint32Array, triangles: Uint32Array, used: Uint8Array): Mesh {
+  const renumbered = new Uint32Array(firsts.length);
+  const positions = new Float64Array(3 * firsts.length);
   let kept = 0;
-  for (let vertex = 0; vertex < used.length; vertex++) {
+  for (let vertex = 0; vertex < firsts.length; vertex++) {
     if (used[vertex] === 0) continue;
-    for (let axis = 0; axis < 3; axis++) positions[3 * kept + axis] = points[3 * vertex + axis]!;
+    for (let axis = 0; axis < 3; axis++) positions[3 * kept + axis] = rounded[3 * firsts[vertex]! + axis]!;
     renumbered[vertex] = kept++;
   }
   for (let i = 0; i < triangles.length; i++) triangles[i] = renumbered[triangles[i]!]!;

@@ -23,7 +23,7 @@ export function planesOf({ group, metric, forms }: Crystal): PlaneSet {
   const carrier = new Uint8Array(count);
   const image = forms.map(({ form }, f) => {
     const start = first[f]!;
-    form.faces.forEach((face, i) => normals.set(face, 3 * (start + i)));
+    normals.set(form.faces.flat(), 3 * start);
     ofForm.fill(f, start, start + form.multiplicity);
     carrier.set(form.carrier, start);
     return form.imageOf.map((face) => start + face);

@@ -1,150 +1,179 @@
-import { exactSide, meet, type SidePlanes } from './side.ts';
-
-const ULP = 2 ** -53;
-/** Numbers kept for a corner: x, y, z and the bound of their error. */
-const CORNER = 4;
+import { CORNER, meet } from './meet.ts';
+import { exactCross, exactSide, type SidePlanes, ULP } from './side.ts';
 
 /**
- * One face's polygon while other planes cut it. It is kept as the cycle of neighbour planes, counter-clockwise seen
+ * One face's polygon while other planes cut it. It is kept as the ring of neighbour planes, counter-clockwise seen
  * from outside; corner i is where the face meets neighbours i and i + 1. Coordinates only serve as a filter in front
- * of exact signs: no coordinate decides the topology.
+ * of exact signs: no coordinate decides the topology. One object serves all faces in turn.
  */
 export class FacePolygon {
-  /** Neighbour planes in order; empty once nothing is left of the face. */
-  neighbours: number[] = [];
+  face = -1;
+  /** How many neighbours, and corners, there are; 0 once nothing is left of the face. */
+  size = 0;
+  ring: Int32Array = new Int32Array(32);
   /** x, y, z, error of each corner. */
-  corners: Float64Array = new Float64Array(16 * CORNER);
-  private spare: Float64Array = new Float64Array(16 * CORNER);
-  private sides: Int8Array = new Int8Array(16);
-  /** Middle and half widths of the box around the corners, and the slack that covers their errors. */
-  private readonly box = new Float64Array(7);
+  corners: Float64Array = new Float64Array(32 * CORNER);
+  private spareRing: Int32Array = new Int32Array(32);
+  private spareCorners: Float64Array = new Float64Array(32 * CORNER);
+  private sides: Int8Array = new Int8Array(32);
+  /** The largest coordinate and the largest error of any corner. */
+  reach = 0;
+  worst = 0;
+  /** The face for which each plane was last tried: no plane is tried twice on one face. */
+  private readonly tried: Int32Array;
 
+  /** @param frame number of the first of six sides of a cube that holds all corners; they follow the planes */
   constructor(
     private readonly planes: SidePlanes,
-    readonly face: number,
-    frame: readonly number[],
+    private readonly frame: number,
   ) {
-    this.neighbours = [...frame];
-    this.makeRoom(frame.length);
-    frame.forEach((neighbour, i) => {
-      meet(planes, face, neighbour, frame[(i + 1) % frame.length]!, this.corners, i * CORNER);
-    });
-    this.measureBox();
+    this.tried = new Int32Array(frame).fill(-1);
   }
 
-  /** Takes away what lies outside plane p. */
-  cut(p: number): void {
-    const { planes, neighbours } = this;
-    const { x, y, z, d } = planes;
-    const [hx, hy, hz, offset] = [x[p]!, y[p]!, z[p]!, d[p]!];
-    const [ax, ay, az] = [Math.abs(hx), Math.abs(hy), Math.abs(hz)];
-    const b = this.box;
-    const slack = (ax + ay + az) * b[6]! + 8 * ULP * Math.abs(offset);
-    const highest = hx * b[0]! + hy * b[1]! + hz * b[2]! + ax * b[3]! + ay * b[4]! + az * b[5]!;
-    if (highest + slack < offset) return;
+  /** Begins with all of a face's plane that lies in the frame. */
+  begin(face: number): void {
+    const { planes, frame, ring } = this;
+    this.face = face;
+    this.size = 4;
+    this.tried[face] = face;
+    const at = 4 * face;
+    const h = planes.rows;
+    const [x, y, z] = [Math.abs(h[at]!), Math.abs(h[at + 1]!), Math.abs(h[at + 2]!)];
+    const k = x >= y && x >= z ? 0 : y >= z ? 1 : 2;
+    const turn = h[at + k]! > 0 ? 0 : 2;
+    const [i, j] = [(k + 1) % 3, (k + 2) % 3];
+    ring[0] = frame + i;
+    ring[1 + turn] = frame + j;
+    ring[2] = frame + 3 + i;
+    ring[3 - turn] = frame + 3 + j;
+    for (let c = 0; c < 4; c++) meet(h, face, ring[c]!, ring[(c + 1) % 4]!, this.corners, c * CORNER);
+    this.measure();
+  }
 
+  /** Takes away what lies outside plane p, if that has not been done. Answers whether a corner has gone. */
+  cut(p: number): boolean {
+    if (this.tried[p] === this.face) return false;
+    this.tried[p] = this.face;
+    const { corners, sides, size } = this;
+    const { rows } = this.planes;
+    const hx = rows[4 * p]!;
+    const hy = rows[4 * p + 1]!;
+    const hz = rows[4 * p + 2]!;
+    const offset = rows[4 * p + 3]!;
+    // Three products, three sums and the offset's own rounding, besides the error of the corner itself.
+    const length = Math.abs(hx) + Math.abs(hy) + Math.abs(hz);
+    const doubt = length * (this.worst + 8 * ULP * this.reach) + 8 * ULP * Math.abs(offset);
     let outside = 0;
     let inside = 0;
-    const count = neighbours.length;
-    for (let i = 0; i < count; i++) {
-      const at = i * CORNER;
-      const [cx, cy, cz] = [this.corners[at]!, this.corners[at + 1]!, this.corners[at + 2]!];
-      const s = hx * cx + hy * cy + hz * cz - offset;
-      const size = ax * Math.abs(cx) + ay * Math.abs(cy) + az * Math.abs(cz) + Math.abs(offset);
-      const doubt = (ax + ay + az) * this.corners[at + 3]! + 8 * ULP * size;
-      const next = neighbours[i + 1 === count ? 0 : i + 1]!;
-      const side = s > doubt ? 1 : s < -doubt ? -1 : exactSide(planes, this.face, neighbours[i]!, next, p);
-      this.sides[i] = side;
+    for (let i = 0; i < size; i++) {
+      const s = hx * corners[i * CORNER]! + hy * corners[i * CORNER + 1]! + hz * corners[i * CORNER + 2]! - offset;
+      const side = s > doubt ? 1 : s < -doubt ? -1 : this.doubtfulSide(i, p, s, length);
+      sides[i] = side;
       if (side > 0) outside += 1;
       else if (side < 0) inside += 1;
     }
-    if (outside === 0) this.touch(p, inside);
-    else if (inside === 0) this.neighbours = [];
+    if (outside === 0) return inside < size && this.touch(p, inside);
+    if (inside === 0) this.size = 0;
     else this.replaceOutside(p);
+    return true;
   }
 
-  /** Plane p cuts nothing off. It may still lie on an edge or on the whole face; then the plane that counts is named. */
-  private touch(p: number, inside: number): void {
-    const { neighbours, sides } = this;
-    const count = neighbours.length;
+  /** A corner's side of plane p, given h·x − D in doubles and |h1| + |h2| + |h3|: with its own error bound, or exactly. */
+  private doubtfulSide(i: number, p: number, s: number, length: number): number {
+    const { corners, ring, size, planes } = this;
+    const at = i * CORNER;
+    const far = Math.max(Math.abs(corners[at]!), Math.abs(corners[at + 1]!), Math.abs(corners[at + 2]!));
+    const doubt = length * (corners[at + 3]! + 8 * ULP * far) + 8 * ULP * Math.abs(planes.rows[4 * p + 3]!);
+    if (s > doubt) return 1;
+    if (s < -doubt) return -1;
+    return exactSide(planes, this.face, ring[i]!, ring[i + 1 === size ? 0 : i + 1]!, p);
+  }
+
+  /**
+   * Plane p cuts nothing off but has corners on it. Where it lies on an edge or on the whole face, the plane that
+   * counts is named: of coincident planes the first, none of two that leave nothing between them.
+   */
+  private touch(p: number, inside: number): boolean {
+    const { ring, sides, size } = this;
     if (inside === 0) {
-      if (p < this.face) this.neighbours = [];
-      return;
+      if (p > this.face && this.facesLike(p)) return false;
+      this.size = 0;
+      return true;
     }
-    for (let i = 0; i < count; i++)
-      if (sides[i] === 0 && sides[(i + count - 1) % count] === 0 && this.isRedundant(neighbours[i]!, p))
-        neighbours[i] = p;
+    for (let i = 0; i < size; i++)
+      if (sides[i] === 0 && sides[(i + size - 1) % size] === 0 && this.isRedundant(ring[i]!, p)) ring[i] = p;
+    return false;
   }
 
-  /** Whether `old` adds nothing along the line that it, plane p and the face share: its normal lies between theirs. */
+  /** For a plane that coincides with the face: whether it looks the same way. */
+  private facesLike(p: number): boolean {
+    const { rows } = this.planes;
+    const [f, q] = [4 * this.face, 4 * p];
+    return rows[f]! * rows[q]! + rows[f + 1]! * rows[q + 1]! + rows[f + 2]! * rows[q + 2]! > 0;
+  }
+
+  /**
+   * Whether `old` adds nothing along the line that it, plane p and the face share: its normal lies between theirs.
+   * Their cross products are all multiples of the line's direction; one component of it tells their senses.
+   */
   private isRedundant(old: number, p: number): boolean {
-    const { x, y, z } = this.planes;
-    const cross = (a: number, b: number): [number, number, number] => [
-      y[a]! * z[b]! - z[a]! * y[b]!,
-      z[a]! * x[b]! - x[a]! * z[b]!,
-      x[a]! * y[b]! - y[a]! * x[b]!,
-    ];
-    const [u, v, w] = cross(this.face, p);
-    const along = ([a, b, c]: [number, number, number]): number => a * u + b * v + c * w;
-    const [toFace, toP] = [along(cross(old, p)), along(cross(this.face, old))];
+    const { planes, face } = this;
+    let k = 0;
+    while (exactCross(planes, face, p, k) === 0) k += 1;
+    const sense = exactCross(planes, face, p, k);
+    const toFace = exactCross(planes, old, p, k) * sense;
+    const toP = exactCross(planes, face, old, k) * sense;
     if (toFace === 0 && toP > 0) return p < old;
     return toFace >= 0 && toP >= 0;
   }
 
   /** Keeps the edges with an end strictly inside, closes the gap with plane p. */
   private replaceOutside(p: number): void {
-    const { neighbours, sides, planes, face } = this;
-    const count = neighbours.length;
-    let first = 0;
-    while (!(sides[(first + count - 1) % count]! >= 0 && sides[first]! < 0)) first += 1;
-    const kept: number[] = [];
-    this.makeRoom(count + 1);
-    const target = this.spare;
-    for (let i = first; ; i = i + 1 === count ? 0 : i + 1) {
-      kept.push(neighbours[i]!);
-      if (sides[i]! >= 0) break;
-      target.set(this.corners.subarray(i * CORNER, i * CORNER + CORNER), (kept.length - 1) * CORNER);
+    if (this.size + 1 >= this.sides.length) this.makeRoom();
+    const { ring, corners, sides, size, face, spareRing, spareCorners } = this;
+    const { rows } = this.planes;
+    let i = 0;
+    while (!(sides[i]! < 0 && sides[i === 0 ? size - 1 : i - 1]! >= 0)) i += 1;
+    let kept = 0;
+    for (; sides[i]! < 0; i = i + 1 === size ? 0 : i + 1) {
+      spareRing[kept] = ring[i]!;
+      for (let n = 0; n < CORNER; n++) spareCorners[kept * CORNER + n] = corners[i * CORNER + n]!;
+      kept += 1;
     }
-    const last = kept.length - 1;
-    meet(planes, face, kept[last]!, p, target, last * CORNER);
-    meet(planes, face, p, kept[0]!, target, (last + 1) * CORNER);
-    kept.push(p);
-    this.spare = this.corners;
-    this.corners = target;
-    this.neighbours = kept;
-    this.measureBox();
+    spareRing[kept] = ring[i]!;
+    spareRing[kept + 1] = p;
+    meet(rows, face, ring[i]!, p, spareCorners, kept * CORNER);
+    meet(rows, face, p, spareRing[0]!, spareCorners, (kept + 1) * CORNER);
+    this.size = kept + 2;
+    this.ring = spareRing;
+    this.spareRing = ring;
+    this.corners = spareCorners;
+    this.spareCorners = corners;
+    this.measure();
   }
 
-  private makeRoom(count: number): void {
-    if (count <= this.sides.length) return;
-    const grow = (old: Float64Array): Float64Array => {
-      const wider = new Float64Array(2 * count * CORNER);
-      wider.set(old);
-      return wider;
+  private measure(): void {
+    const { corners, size } = this;
+    let reach = 0;
+    let worst = 0;
+    for (let at = 0; at < size * CORNER; at += CORNER) {
+      reach = Math.max(reach, Math.abs(corners[at]!), Math.abs(corners[at + 1]!), Math.abs(corners[at + 2]!));
+      worst = Math.max(worst, corners[at + 3]!);
+    }
+    this.reach = reach;
+    this.worst = worst;
+  }
+
+  /** Doubles the room of everything that is as long as the ring. */
+  private makeRoom(): void {
+    const wider = <T extends Int8Array | Int32Array | Float64Array>(fresh: T, old: T): T => {
+      fresh.set(old);
+      return fresh;
     };
-    this.corners = grow(this.corners);
-    this.spare = grow(this.spare);
-    const sides = new Int8Array(2 * count);
-    sides.set(this.sides);
-    this.sides = sides;
-  }
-
-  private measureBox(): void {
-    const { corners, box } = this;
-    const end = this.neighbours.length * CORNER;
-    let [error, reach] = [0, 0];
-    for (let axis = 0; axis < 3; axis++) {
-      let [low, high] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
-      for (let at = axis; at < end; at += CORNER) {
-        const value = corners[at]!;
-        if (value < low) low = value;
-        if (value > high) high = value;
-      }
-      box[axis] = (low + high) / 2;
-      box[axis + 3] = (high - low) / 2;
-      reach = Math.max(reach, Math.abs(low), Math.abs(high));
-    }
-    for (let at = 3; at < end; at += CORNER) error = Math.max(error, corners[at]!);
-    box[6] = error + 16 * ULP * reach;
+    this.ring = wider(new Int32Array(2 * this.ring.length), this.ring);
+    this.corners = wider(new Float64Array(2 * this.corners.length), this.corners);
+    this.sides = wider(new Int8Array(2 * this.sides.length), this.sides);
+    this.spareRing = new Int32Array(this.ring.length);
+    this.spareCorners = new Float64Array(this.corners.length);
   }
 }

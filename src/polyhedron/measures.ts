@@ -1,3 +1,4 @@
+import type { PlaneSet } from './planes.ts';
 import type { Solid } from './solid.ts';
 
 type Vector = readonly [number, number, number];
@@ -25,6 +26,8 @@ export interface Measures {
   readonly area: Float64Array;
   /** Outward unit normals of every plane, three numbers each. */
   readonly normals: Float64Array;
+  /** Central distance of every plane: from the origin along its normal. */
+  readonly distance: Float64Array;
   readonly surface: number;
   readonly volume: number;
   readonly centroid: Vector;
@@ -41,28 +44,30 @@ export function measure(solid: Solid, frame: Frame): Measures {
   if (solid.state !== 'bounded') throw new RangeError(`A solid that is ${solid.state} has no measures.`);
   const positions = toFrame(solid.vertices, frame);
   const count = solid.planes.form.length;
-  const normals = unitNormals(solid.planes.normals, frame);
+  const { normals, distance } = cartesianPlanes(solid.planes, frame);
   const area = new Float64Array(count);
   const faces: number[] = [];
   const centroid = [0, 0, 0];
-  let [surface, volume, inscribed] = [0, 0, Number.POSITIVE_INFINITY];
+  let [surface, pyramids, inscribed] = [0, 0, Number.POSITIVE_INFINITY];
   for (let f = 0; f < count; f++) {
     if (solid.start[f] === solid.start[f + 1]) continue;
     faces.push(f);
     const size = polygon(solid, positions, f);
-    area[f] = Math.hypot(...size.areaVector);
+    // Along the plane's own normal: the polygon of a sliver is too thin to tell its own.
+    area[f] = Math.max(0, dot(size.areaVector, vectorAt(normals, f)));
     surface += area[f]!;
-    const height = dot(size.areaVector, size.first) / area[f]!;
-    volume += (area[f]! * height) / 3;
-    inscribed = Math.min(inscribed, height);
+    pyramids += area[f]! * distance[f]!;
+    inscribed = Math.min(inscribed, distance[f]!);
     for (let axis = 0; axis < 3; axis++) centroid[axis]! += size.pyramid[axis]!;
   }
+  const volume = pyramids / 3;
   const spread = extremes(positions);
   return {
     positions,
     faces,
     area,
     normals,
+    distance,
     surface,
     volume,
     centroid: [centroid[0]! / volume, centroid[1]! / volume, centroid[2]! / volume],
@@ -121,7 +126,7 @@ function polygon(solid: Solid, positions: Float64Array, face: number) {
       pyramid[axis]! += ((first[axis]! + p[axis]! + q[axis]!) * sixfold) / 24;
     }
   }
-  return { first, areaVector, pyramid };
+  return { areaVector, pyramid };
 }
 
 function extremes(positions: Float64Array) {
@@ -147,24 +152,26 @@ function toFrame(points: Float64Array, m: Frame): Float64Array {
   return out;
 }
 
-/** Normals are rows: they go to the frame by its inverse, whose columns are cross products of its columns. */
-function unitNormals(rows: Float64Array, m: Frame): Float64Array {
+/** Normals are rows: they go to the frame by its inverse, whose rows are cross products of the frame's columns. */
+function cartesianPlanes({ normals: rows, form, offsets }: PlaneSet, m: Frame) {
   const column = (j: number): Vector => [m[j]!, m[3 + j]!, m[6 + j]!];
   const [a, b, c] = [column(0), column(1), column(2)];
-  const turn = Math.sign(dot(a, cross(b, c)));
+  const det = dot(a, cross(b, c));
   const dual = [cross(b, c), cross(c, a), cross(a, b)];
-  const out = new Float64Array(rows.length);
-  for (let at = 0; at < rows.length; at += 3) {
+  const normals = new Float64Array(rows.length);
+  const distance = new Float64Array(form.length);
+  for (let p = 0; p < form.length; p++) {
     const n = [0, 1, 2].map(
-      (k) => turn * (rows[at]! * dual[0]![k]! + rows[at + 1]! * dual[1]![k]! + rows[at + 2]! * dual[2]![k]!),
+      (k) => (rows[3 * p]! * dual[0]![k]! + rows[3 * p + 1]! * dual[1]![k]! + rows[3 * p + 2]! * dual[2]![k]!) / det,
     );
     const length = Math.hypot(...n);
-    out.set(
+    normals.set(
       n.map((value) => value / length),
-      at,
+      3 * p,
     );
+    distance[p] = offsets[form[p]!]!.approximate / length;
   }
-  return out;
+  return { normals, distance };
 }
 
 const toVector = (v: readonly number[]): Vector => [v[0]!, v[1]!, v[2]!];

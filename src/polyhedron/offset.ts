@@ -11,7 +11,7 @@ export interface Offset {
   readonly multiple: number;
   /** The unit's nearest double. */
   readonly unit: number;
-  /** The exact value as a fraction. */
+  /** The exact value as a fraction, worked out when asked for. */
   readonly exact: Fraction;
 }
 
@@ -61,8 +61,21 @@ export function exactOffsets(values: readonly number[]): Offset[] {
     if (value === 0) return ZERO;
     const family = families.get(value) ?? families.size + 1;
     families.set(value, family);
-    return { approximate: value, family, multiple: 1, unit: value, exact: fractionOf(value) };
+    return doubleOffset(value, family);
   });
+}
+
+/** A double at its exact value, as a family of its own. */
+export function doubleOffset(value: number, family: number): Offset {
+  return {
+    approximate: value,
+    family,
+    multiple: 1,
+    unit: value,
+    get exact() {
+      return fractionOf(value);
+    },
+  };
 }
 
 const ZERO: Offset = { approximate: 0, family: 0, multiple: 0, unit: 0, exact: { numerator: 0n, denominator: 1n } };
@@ -106,13 +119,15 @@ function joins(family: Family, value: number, place: number): boolean {
 }
 
 function offsetIn(family: Family, index: number, { p, q }: { p: number; q: number }): Offset {
-  const base = fractionOf(family.base);
   return {
     approximate: (family.base * p) / q,
     family: index,
     multiple: (family.common / q) * p,
     unit: family.base / family.common,
-    exact: { numerator: base.numerator * BigInt(p), denominator: base.denominator * BigInt(q) },
+    get exact() {
+      const base = fractionOf(family.base);
+      return { numerator: base.numerator * BigInt(p), denominator: base.denominator * BigInt(q) };
+    },
   };
 }
 

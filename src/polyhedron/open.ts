@@ -47,7 +47,8 @@ function planeBasis([h, k, l]: Vector): Vector[] {
   )
     .filter((v) => !isZero(v))
     .map(lowest);
-  return inPlane.slice(0, 2);
+  const [first] = inPlane;
+  return [first!, inPlane.find((v) => !isZero(cross(first!, v)))!];
 }
 
 function distinct(normals: ArrayLike<number>): Vector[] {

@@ -1,60 +1,43 @@
-import { type Fraction, fractionOf, LARGEST_MULTIPLE, type Offset } from './offset.ts';
+import { type BigRow, bigCross, bigMeet, bigRow, bigSide } from './big.ts';
+import { LARGEST_MULTIPLE, type Offset } from './offset.ts';
 
 /** Half a unit in the last place of 1: every float operation below errs by at most this, relatively. */
-const ULP = 2 ** -53;
+export const ULP = 2 ** -53;
 /** Normals of whole numbers up to this are multiplied out exactly in doubles: 6·999³·2^18·4 < 2^53. */
 const LARGEST_INTEGER_NORMAL = 999;
 
-/** Planes with all that the sign of a corner needs, one entry a plane. */
+/** Planes with all that the sign of a corner needs. */
 export interface SidePlanes {
-  readonly x: Float64Array;
-  readonly y: Float64Array;
-  readonly z: Float64Array;
-  /** Nearest doubles to the exact offsets. */
-  readonly d: Float64Array;
+  /** h1, h2, h3 and the nearest double to the exact offset of each plane, one plane after the other. */
+  readonly rows: Float64Array;
   readonly offset: readonly Offset[];
   /** 1 where the integer shortcut holds: whole normals within bounds and a small multiple. */
   readonly whole: Uint8Array;
-}
-
-export function sidePlanes(normals: ArrayLike<number>, offset: readonly Offset[]): SidePlanes {
-  const count = offset.length;
-  const take = (axis: number): Float64Array => Float64Array.from(offset, (_, p) => normals[3 * p + axis] ?? 0);
-  const [x, y, z] = [take(0), take(1), take(2)];
-  const fits = (h: number): boolean => Number.isInteger(h) && Math.abs(h) <= LARGEST_INTEGER_NORMAL;
-  const whole = new Uint8Array(count);
-  offset.forEach(({ multiple }, p) => {
-    whole[p] = +(Math.abs(multiple) <= LARGEST_MULTIPLE && fits(x[p]!) && fits(y[p]!) && fits(z[p]!));
-  });
-  return { x, y, z, d: Float64Array.from(offset, (o) => o.approximate), offset, whole };
+  /** Planes that were needed in whole numbers of any size. */
+  readonly big: Map<number, BigRow>;
 }
 
 /**
- * Where three planes meet, as doubles with a bound of their error.
- * Writes x, y, z and the error (largest of the three coordinates, ∞ when nothing is known) to `out[at…at+3]`.
+ * @param normals h1, h2, h3 of each plane, one after the other
+ * @param offset one a plane
  */
-export function meet(s: SidePlanes, a: number, b: number, c: number, out: Float64Array, at: number): void {
-  const [ax, ay, az, da] = [s.x[a]!, s.y[a]!, s.z[a]!, s.d[a]!];
-  const [bx, by, bz, db] = [s.x[b]!, s.y[b]!, s.z[b]!, s.d[b]!];
-  const [cx, cy, cz, dc] = [s.x[c]!, s.y[c]!, s.z[c]!, s.d[c]!];
-  const [bcx, bcy, bcz] = [by * cz - bz * cy, bz * cx - bx * cz, bx * cy - by * cx];
-  const det = ax * bcx + ay * bcy + az * bcz;
-  const x = da * bcx + db * (cy * az - cz * ay) + dc * (ay * bz - az * by);
-  const y = da * bcy + db * (cz * ax - cx * az) + dc * (az * bx - ax * bz);
-  const z = da * bcz + db * (cx * ay - cy * ax) + dc * (ax * by - ay * bx);
-  out[at] = x / det;
-  out[at + 1] = y / det;
-  out[at + 2] = z / det;
-  const reach = Math.max(Math.abs(out[at]!), Math.abs(out[at + 1]!), Math.abs(out[at + 2]!));
-  const [na, nb, nc] = [largest(ax, ay, az), largest(bx, by, bz), largest(cx, cy, cz)];
-  // Each numerator has 6 products of at most |D|·n·n′, det 6 of at most na·nb·nc; each carries at most 6 roundings.
-  const numerator = 2 * (Math.abs(da) * nb * nc + Math.abs(db) * nc * na + Math.abs(dc) * na * nb);
-  const determinant = 6 * na * nb * nc;
-  const doubt = Math.abs(det) - 8 * ULP * determinant;
-  out[at + 3] = doubt > 0 ? (8 * ULP * (numerator + reach * determinant)) / doubt : Number.POSITIVE_INFINITY;
+export function sidePlanes(normals: ArrayLike<number>, offset: readonly Offset[]): SidePlanes {
+  const count = offset.length;
+  const rows = new Float64Array(4 * count);
+  const whole = new Uint8Array(count);
+  for (let p = 0; p < count; p++) {
+    const [x, y, z] = [normals[3 * p]!, normals[3 * p + 1]!, normals[3 * p + 2]!];
+    const { approximate, multiple } = offset[p]!;
+    rows[4 * p] = x;
+    rows[4 * p + 1] = y;
+    rows[4 * p + 2] = z;
+    rows[4 * p + 3] = approximate;
+    whole[p] = +(fits(x) && fits(y) && fits(z) && Math.abs(multiple) <= LARGEST_MULTIPLE);
+  }
+  return { rows, offset, whole, big: new Map() };
 }
 
-const largest = (x: number, y: number, z: number): number => Math.max(Math.abs(x), Math.abs(y), Math.abs(z));
+const fits = (h: number): boolean => Math.abs(h) <= LARGEST_INTEGER_NORMAL && Math.floor(h) === h;
 
 /**
  * Exact sign of `h·x − D` for plane p at the corner of planes a, b, c: 1 outside, 0 on the plane, −1 inside.
@@ -65,13 +48,41 @@ export function exactSide(s: SidePlanes, a: number, b: number, c: number, p: num
     const quick = integerSide(s, a, b, c, p);
     if (quick !== null) return quick;
   }
-  return bigSide(s, a, b, c, p);
+  return bigSide(big(s, a), big(s, b), big(s, c), big(s, p));
 }
 
-const triple = (s: SidePlanes, a: number, b: number, c: number): number =>
-  s.x[a]! * (s.y[b]! * s.z[c]! - s.z[b]! * s.y[c]!) +
-  s.y[a]! * (s.z[b]! * s.x[c]! - s.x[b]! * s.z[c]!) +
-  s.z[a]! * (s.x[b]! * s.y[c]! - s.y[b]! * s.x[c]!);
+/** Exact sign of component k (0, 1, 2) of the cross product of the normals of planes a and b. */
+export function exactCross(s: SidePlanes, a: number, b: number, k: number): -1 | 0 | 1 {
+  const [i, j] = [(k + 1) % 3, (k + 2) % 3];
+  const left = s.rows[4 * a + i]! * s.rows[4 * b + j]!;
+  const right = s.rows[4 * a + j]! * s.rows[4 * b + i]!;
+  // One rounding in each product and one in their difference; none where both are whole and small.
+  const doubt = s.whole[a]! & s.whole[b]! ? 0 : 3 * ULP * (Math.abs(left) + Math.abs(right));
+  if (Math.abs(left - right) > doubt) return left > right ? 1 : -1;
+  return doubt === 0 ? 0 : bigCross(big(s, a), big(s, b), k);
+}
+
+/** Where three planes meet, exactly, then rounded to doubles. */
+export function exactMeet(s: SidePlanes, a: number, b: number, c: number): readonly [number, number, number] {
+  return bigMeet(big(s, a), big(s, b), big(s, c));
+}
+
+function big(s: SidePlanes, p: number): BigRow {
+  const known = s.big.get(p);
+  if (known) return known;
+  const row = bigRow(s.rows[4 * p]!, s.rows[4 * p + 1]!, s.rows[4 * p + 2]!, s.offset[p]!.exact);
+  s.big.set(p, row);
+  return row;
+}
+
+/** Determinant of three normals; exact where all three are whole. */
+function triple({ rows }: SidePlanes, a: number, b: number, c: number): number {
+  const [bx, by, bz] = [rows[4 * b]!, rows[4 * b + 1]!, rows[4 * b + 2]!];
+  const [cx, cy, cz] = [rows[4 * c]!, rows[4 * c + 1]!, rows[4 * c + 2]!];
+  return (
+    rows[4 * a]! * (by * cz - bz * cy) + rows[4 * a + 1]! * (bz * cx - bx * cz) + rows[4 * a + 2]! * (bx * cy - by * cx)
+  );
+}
 
 const families = new Int32Array(4);
 const sums = new Float64Array(4);
@@ -95,7 +106,8 @@ function integerSide(s: SidePlanes, a: number, b: number, c: number, p: number):
   }
   // One rounding in each unit, one in each product, three in the sum.
   if (live > 1 && Math.abs(sum) <= 8 * ULP * size) return null;
-  return (Math.sign(sum) * Math.sign(det)) as -1 | 0 | 1;
+  if (sum === 0) return 0;
+  return sum > 0 === det > 0 ? 1 : -1;
 }
 
 function add(used: number, offset: Offset, cofactor: number): number {
@@ -108,26 +120,4 @@ function add(used: number, offset: Offset, cofactor: number): number {
   units[used] = offset.unit;
   sums[used] = offset.multiple * cofactor;
   return used + 1;
-}
-
-type Row = readonly [bigint, bigint, bigint, bigint];
-
-/** A plane times a positive number that makes all four of its numbers whole. */
-function bigRow(s: SidePlanes, p: number): Row {
-  const terms: Fraction[] = [fractionOf(s.x[p]!), fractionOf(s.y[p]!), fractionOf(s.z[p]!), s.offset[p]!.exact];
-  const [x, y, z, d] = terms.map(({ numerator }, i) =>
-    terms.reduce((product, { denominator }, j) => (i === j ? product : product * denominator), numerator),
-  );
-  return [x!, y!, z!, d!];
-}
-
-const bigTriple = (a: Row, b: Row, c: Row): bigint =>
-  a[0] * (b[1] * c[2] - b[2] * c[1]) + a[1] * (b[2] * c[0] - b[0] * c[2]) + a[2] * (b[0] * c[1] - b[1] * c[0]);
-
-function bigSide(s: SidePlanes, pa: number, pb: number, pc: number, pp: number): -1 | 0 | 1 {
-  const [a, b, c, p] = [bigRow(s, pa), bigRow(s, pb), bigRow(s, pc), bigRow(s, pp)];
-  const det = bigTriple(a, b, c);
-  const sum = a[3] * bigTriple(p, b, c) + b[3] * bigTriple(p, c, a) + c[3] * bigTriple(p, a, b) - p[3] * det;
-  if (sum === 0n) return 0;
-  return sum > 0n === det > 0n ? 1 : -1;
 }

@@ -22,6 +22,8 @@ export interface MineralFacts {
   readonly name: string;
   readonly formula: string;
   readonly habit: string;
+  /** The habit that the mineral's name alone stands for. */
+  readonly firstHabit: string;
   /** Where the cell comes from. */
   readonly source: string;
 }

@@ -18,7 +18,8 @@ export function readDirection(input: ZoneInput, group: PointGroup | undefined): 
 
 /** Size as a recipe or a flag states it. @throws CrystalError, QuantityError */
 export function readSize(input: SizeInput, group: PointGroup | undefined): Size {
-  if (typeof input !== 'object') return { kind: 'longest', length: bounded(readLength(input)) };
+  if (typeof input === 'string') return readSizeText(input, group);
+  if (typeof input === 'number') return { kind: 'longest', length: bounded(readLength(input)) };
   if ('longest' in input) return { kind: 'longest', length: bounded(readLength(input.longest)) };
   if ('along' in input)
     return { kind: 'along', zone: readDirection(input.along, group), length: bounded(readLength(input.length)) };
@@ -29,6 +30,18 @@ export function readSize(input: SizeInput, group: PointGroup | undefined): Size 
   }
   if ('volume' in input) return { kind: 'volume', cubicMillimetres: positive(readVolume(input.volume), 'a volume') };
   return { kind: 'scale', millimetresPerUnit: positive(input.scale, 'a scale') };
+}
+
+/** "70", "9 cm along c", "20 mm between 100", "50 cm3", "scale 12". */
+function readSizeText(text: string, group: PointGroup | undefined): Size {
+  const [, length = text, word, target = ''] = /^(.*?)\s+(along|between)\s+(.+)$/.exec(text.trim()) ?? [];
+  if (word === 'along') return readSize({ along: target, length }, group);
+  if (word === 'between') return readSize({ between: target, length }, group);
+  const scale = /^scale\s+(\S+)$/.exec(text.trim());
+  if (scale) return readSize({ scale: Number(scale[1]) }, group);
+  return /(3|³|ml)\s*$/i.test(text) && /[a-z]/i.test(text)
+    ? readSize({ volume: text }, group)
+    : { kind: 'longest', length: bounded(readLength(text)) };
 }
 
 function positive(value: number, what: string): number {
@@ -54,13 +67,24 @@ export function readAxes(input: AxesInput, group: PointGroup | undefined, printe
     throw new QuantityError(
       `no crystal has an axis of order ${unknown}.`,
       'Orders are 2, 3, 4 and 6; -3, -4 and -6 choose rotoinversion axes only.',
+      'orders',
     );
   const chosen = given.directions?.map((direction) => readDirection(direction, group));
   return {
     orders: given.orders ?? null,
     directions: chosen ?? null,
     fit: given.fit ?? 'fused',
-    diameter: bounded(given.diameter === undefined ? mm(printer.rod.diameter) : readLength(given.diameter)),
-    reach: bounded(given.reach === undefined ? mm(USUAL_REACH) : readLength(given.reach)),
+    diameter: under('diameter', () => bounded(readLength(given.diameter ?? printer.rod.diameter))),
+    reach: under('reach', () => bounded(readLength(given.reach ?? USUAL_REACH))),
   };
+}
+
+/** Names the key whose value is being read in the error about it. */
+function under<T>(key: string, step: () => T): T {
+  try {
+    return step();
+  } catch (error) {
+    if (error instanceof QuantityError) throw new QuantityError(error.message, error.hint, key);
+    throw error;
+  }
 }

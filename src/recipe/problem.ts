@@ -53,11 +53,17 @@ export interface Origin {
 export class RecipeError extends Error {
   override readonly name = 'RecipeError';
 
+  /** In the order in which they stand in the text. */
+  readonly problems: readonly Problem[];
+
   constructor(
     readonly origin: Origin,
-    readonly problems: readonly Problem[],
+    problems: readonly Problem[],
   ) {
-    super(problems.map((problem) => describe(origin, problem)).join('\n\n'));
+    const offset = ({ path }: Problem): number => origin.place?.(path)?.offset ?? 0;
+    const sorted = [...problems].sort((a, b) => offset(a) - offset(b));
+    super(sorted.map((problem) => describe(origin, problem)).join('\n\n'));
+    this.problems = sorted;
   }
 }
 

@@ -10,6 +10,8 @@ export class QuantityError extends Error {
   constructor(
     message: string,
     readonly hint: string,
+    /** The key, below the one being read, whose value is at fault. */
+    readonly key?: string,
   ) {
     super(message);
   }

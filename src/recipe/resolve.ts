@@ -7,7 +7,7 @@ import { parseFace, readOptions } from '../crystal/indices.ts';
 import { nearest } from '../crystal/nearest.ts';
 import { type PointGroup, pointGroup } from '../crystal/point-group.ts';
 import type { Miller } from '../crystal/spaces.ts';
-import type { Crystal, CrystalForm, PrintPlan, Resolved } from './crystal.ts';
+import type { Crystal, CrystalForm, MineralFacts, PrintPlan, Resolved } from './crystal.ts';
 import { readAxes, readSize } from './print-plan.ts';
 import { type Origin, type Path, type Problem, type ProblemCode, RecipeError } from './problem.ts';
 import { QuantityError } from './quantity.ts';
@@ -26,6 +26,8 @@ const DISTANCES = { least: 1e-6, most: 1e6 };
 export function resolve(written: Written, shelf: Shelf): Resolved {
   return new Reading(written, shelf).result();
 }
+
+type ChosenMineral = MineralPreset & { readonly id: string; readonly habit: string };
 
 /** One recipe being read. Problems are collected, so that a person hears of all of them at once. */
 class Reading {
@@ -50,13 +52,7 @@ class Reading {
     const print = this.print(group);
     if (this.problems.length > 0 || !group || !cell || !forms || !print)
       throw new RecipeError(this.origin, this.problems);
-    const facts = mineral && {
-      id: mineral.id,
-      name: mineral.name,
-      formula: mineral.formula,
-      habit: mineral.habit,
-      source: mineral.source,
-    };
+    const facts = mineral && factsOf(mineral);
     const title =
       this.recipe.title ?? (facts ? `${facts.name}, ${facts.habit}` : `Crystal of point group ${group.hermannMauguin}`);
     const crystal: Crystal = { title, mineral: facts, group, cell, metric: metric(cell, group.axes), forms };
@@ -70,17 +66,18 @@ class Reading {
       return step();
     } catch (error) {
       if (!(error instanceof CrystalError || error instanceof QuantityError)) throw error;
-      this.say(code, path, error.message, error.hint);
+      const place = error instanceof QuantityError && error.key ? [...path, error.key] : path;
+      this.say(code, place, error.message, error.hint);
       return undefined;
     }
   }
 
   private say(code: ProblemCode, path: Path, message: string, hint?: string): void {
     const sentence = message.endsWith('.') ? message : `${message}.`;
-    this.problems.push({ code, message: sentence, ...(hint && { hint: capital(hint) }), path });
+    this.problems.push({ code, message: sentence, ...(hint && { hint: asSentence(hint) }), path });
   }
 
-  private mineral(): (MineralPreset & { id: string; habit: string }) | null {
+  private mineral(): ChosenMineral | null {
     const { mineral: id, habit } = this.recipe;
     if (typeof id !== 'string') {
       if (habit !== undefined)
@@ -132,7 +129,7 @@ class Reading {
     });
   }
 
-  private forms(mineral: (MineralPreset & { habit: string }) | null, group: PointGroup): CrystalForm[] | undefined {
+  private forms(mineral: ChosenMineral | null, group: PointGroup): CrystalForm[] | undefined {
     const own = this.recipe.forms;
     const given = own ?? mineral?.habits[mineral.habit]?.forms;
     if (!Array.isArray(given) || given.length === 0) {
@@ -231,6 +228,10 @@ class Reading {
   }
 }
 
+function factsOf({ id, name, formula, habit, habits, source }: ChosenMineral): MineralFacts {
+  return { id, name, formula, habit, firstHabit: Object.keys(habits)[0]!, source };
+}
+
 /** What a recipe is read with where no printer profiles are at hand: an ordinary filament printer, 0.4 mm nozzle. */
 const FALLBACK_PRINTER: PrinterProfile = {
   name: 'Filament printer, 0.4 mm nozzle',
@@ -245,7 +246,11 @@ function samePlace(known: Path, path: Path): boolean {
   );
 }
 
-const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
+/** Hints that end in a line to copy, set off by two blanks, get no full stop that would be copied too. */
+function asSentence(text: string): string {
+  const ended = /[.?!]$/.test(text) || text.includes('  ') ? text : `${text}.`;
+  return ended.charAt(0).toUpperCase() + ended.slice(1);
+}
 
 function defined<T extends object>(values: T): { [K in keyof T]?: Exclude<T[K], undefined> } {
   return Object.fromEntries(Object.entries(values).filter(([, value]) => value !== undefined)) as {

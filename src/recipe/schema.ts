@@ -38,7 +38,11 @@ const sizes = [
   z.strictObject({ volume: z.union([z.number(), z.string()]).describe('mm³, or text with mm3, cm3 or ml') }),
   z.strictObject({ scale: z.number().describe('millimetres for each unit of distance') }),
 ] as const;
-const size = z.union([lengthText, ...sizes]).describe('a length alone is the longest extent');
+const size = z
+  .union([lengthText, ...sizes])
+  .describe(
+    'a length alone is the longest extent; text may also be "90 mm along c", "20 mm between 100", "50 cm3", "scale 12"',
+  );
 
 const chosenAxes = z.strictObject({
   orders: z.array(z.number()).optional().describe('2, 3, 4, 6; negative: only rotoinversion axes'),

@@ -133,6 +133,6 @@ function valueAt(root: unknown, path: Path): unknown {
 }
 
 function told(value: unknown): string {
-  const text = JSON.stringify(value) ?? String(value);
+  const text = typeof value === 'number' ? String(value) : (JSON.stringify(value) ?? String(value));
   return text.length > 40 ? `${text.slice(0, 37)}…` : text;
 }

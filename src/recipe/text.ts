@@ -1,4 +1,4 @@
-import { type Document, isMap, isNode, isScalar, LineCounter, type Pair, parseDocument } from 'yaml';
+import { type Document, isMap, isNode, isScalar, LineCounter, type Pair, parseDocument, visit } from 'yaml';
 import { type Origin, type Path, type Place, type Problem, RecipeError } from './problem.ts';
 
 /** A recipe is a label's worth of text; more than this is somebody's mistake. */
@@ -29,6 +29,7 @@ export function readText(text: string, name: string): Written {
       { code: 'syntax', message: `this is not YAML: ${first.message}.`, hint: mend(first.code), path: [] },
     ]);
   }
+  keepLeadingZeros(document);
   try {
     return { value: document.toJS({ maxAliasCount: MOST_ALIASES }), origin };
   } catch {
@@ -38,6 +39,15 @@ export function readText(text: string, name: string): Written {
       `Write the values out; at most ${MOST_ALIASES} aliases are read.`,
     );
   }
+}
+
+/** YAML takes 010 for the number 10; in a recipe it is the face (010). Such scalars stay text. */
+function keepLeadingZeros(document: Document): void {
+  visit(document, {
+    Scalar(_, node) {
+      if (typeof node.value === 'number' && node.source && /^[+-]?0\d/.test(node.source)) node.value = node.source;
+    },
+  });
 }
 
 function mend(code: string): string {

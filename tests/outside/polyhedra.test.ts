@@ -37,9 +37,9 @@ interface FormResult {
   readonly gap?: number;
 }
 
-const { cases } = JSON.parse(
-  readFileSync(new URL('./reference/polyhedra-sample.json', import.meta.url), 'utf8'),
-) as { cases: readonly Case[] };
+const { cases } = JSON.parse(readFileSync(new URL('./reference/polyhedra-sample.json', import.meta.url), 'utf8')) as {
+  cases: readonly Case[];
+};
 
 const CLOSE = 1e-9;
 

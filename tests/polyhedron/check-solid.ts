@@ -66,7 +66,8 @@ function vertexFaults(solid: Solid): string[] {
       const appears = solid.start[p + 1]! > solid.start[p]!;
       if (side > 0) faults.push(`vertex ${v} is outside plane ${p}`);
       if (side !== 0 && faces.includes(p)) faults.push(`vertex ${v} is not on its face ${p}`);
-      if (side === 0 && appears && !faces.includes(p)) faults.push(`vertex ${v} is on face ${p}, which does not know it`);
+      if (side === 0 && appears && !faces.includes(p))
+        faults.push(`vertex ${v} is on face ${p}, which does not know it`);
     });
   });
   return faults;

@@ -30,8 +30,9 @@ export function crystalPlanes(key: string, forms: readonly FormInput[]): PlaneSe
   const ops = groups.find((group) => group.key === key)!.ops;
   const order = ops.length;
   const number = new Map(ops.map(({ W }, i) => [text(W), i]));
-  const product = Uint8Array.from({ length: order * order }, (_, at) =>
-    number.get(text(multiply(ops[Math.floor(at / order)]!.W, ops[at % order]!.W)))!,
+  const product = Uint8Array.from(
+    { length: order * order },
+    (_, at) => number.get(text(multiply(ops[Math.floor(at / order)]!.W, ops[at % order]!.W)))!,
   );
   const [normals, form, carrier]: [number[], number[], number[]] = [[], [], []];
   const image = forms.map(({ hkl }, f) => {

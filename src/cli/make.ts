@@ -1,0 +1,65 @@
+import { Command } from 'commander';
+import { json, remark, result } from './say.ts';
+
+interface MakeFlags {
+  out: string;
+  size?: string;
+  axes?: string | true;
+  rods?: string;
+  rodDiameter?: string;
+  reach?: string;
+  printer?: string;
+  text?: true;
+  name?: string;
+  json?: true;
+}
+
+/** What every print needs said; see shared handling advice in the README. */
+const CAUTION =
+  'Edges and points are sharp as printed, and rods and caps are small parts: not a toy, not tested for children. ' +
+  'Check with your safety officer and local rules before others handle it.';
+
+export function makeCommand(): Command {
+  return new Command('make')
+    .description('Make the files for printing a crystal.')
+    .argument('<recipe...>', 'presets (quartz, pyrite/pyritohedron), YAML files, or - for standard input')
+    .option('-o, --out <folder>', 'where the files go', 'out')
+    .option('-s, --size <size>', 'longest extent in mm; or "90 mm along c", "20 mm between 100", "50 cm3", "scale 12"')
+    .option('-a, --axes [which]', 'symmetry axes as rods: all, orders (3,2 or -4) or directions ("[001],[110]")')
+    .option('--rods <fit>', 'rods fused to the crystal, or separate with bores for them')
+    .option('--rod-diameter <length>', 'thickness of the rods')
+    .option('--reach <length>', 'how far rods stand out of the crystal')
+    .option('-p, --printer <profile>', 'printer profile: fdm-0.4, fdm-0.25, sla')
+    .option('--text', 'write STL as text instead of binary')
+    .option('-n, --name <name>', 'file name without ending')
+    .option('--json', 'print a report for machines')
+    .addHelpText(
+      'after',
+      '\nExamples:\n  goniolith make quartz --axes 3,2 --size "90 mm along c"\n  goniolith make my-crystal.yaml --out prints/',
+    )
+    .action(make);
+}
+
+async function make(recipes: string[], flags: MakeFlags): Promise<void> {
+  const [{ recipeFrom }, { makeModel }, { writeFiles }, { printFlags }] = await Promise.all([
+    import('./recipe-input.ts'),
+    import('../make.ts'),
+    import('../disk/write-files.ts'),
+    import('./print-flags.ts'),
+  ]);
+  const reports: unknown[] = [];
+  for (const recipe of recipes) {
+    const resolved = await recipeFrom(recipe, printFlags(flags));
+    const made = await makeModel(resolved);
+    await writeFiles(flags.out, made.files);
+    const { makeReport } = await import('./make-report.ts');
+    const report = makeReport(resolved, made, flags.out);
+    reports.push(report);
+    if (flags.json) continue;
+    remark(report.summary);
+    for (const file of report.files) result(file.path);
+    for (const sentence of report.remarks) remark(`  ${sentence}`);
+  }
+  if (flags.json) json(recipes.length === 1 ? reports[0] : reports);
+  else remark(`  ${CAUTION}`);
+}

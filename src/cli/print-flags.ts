@@ -1,0 +1,51 @@
+import type { RecipeInput } from '../recipe/schema.ts';
+import { UsageError } from './failure.ts';
+
+type PrintInput = NonNullable<RecipeInput['print']>;
+
+export interface PrintFlags {
+  size?: string;
+  axes?: string | true;
+  rods?: string;
+  rodDiameter?: string;
+  reach?: string;
+  printer?: string;
+  text?: true;
+  name?: string;
+}
+
+/** Flags as the part of a recipe that they stand for. @throws UsageError where they do not go together */
+export function printFlags(flags: PrintFlags): PrintInput {
+  const axes = axesFrom(flags);
+  return {
+    ...(flags.size !== undefined && { size: flags.size }),
+    ...(axes !== undefined && { axes }),
+    ...(flags.printer !== undefined && { printer: flags.printer }),
+    ...(flags.text && { stl: 'text' as const }),
+    ...(flags.name !== undefined && { file: flags.name }),
+  };
+}
+
+function axesFrom({ axes, rods, rodDiameter, reach }: PrintFlags): PrintInput['axes'] | undefined {
+  const details = {
+    ...(rodDiameter !== undefined && { diameter: rodDiameter }),
+    ...(reach !== undefined && { reach }),
+  };
+  if (rods !== undefined && rods !== 'fused' && rods !== 'separate')
+    throw new UsageError(`--rods is fused or separate, not "${rods}".`);
+  const more = { ...details, ...(rods !== undefined && { fit: rods as 'fused' | 'separate' }) };
+  if (axes === undefined) {
+    if (Object.keys(more).length > 0) throw new UsageError('--rods, --rod-diameter and --reach go with --axes.');
+    return undefined;
+  }
+  return { ...chosen(axes), ...more };
+}
+
+/** "all", "3,2", "-4", "[001],[110]", "c". */
+function chosen(which: string | true): { orders?: number[]; directions?: string[] } {
+  if (which === true || which.trim() === 'all') return {};
+  const words = which.match(/\[[^\]]*\]|[^\s,]+/g) ?? [];
+  const orders = words.filter((word) => /^[-−]?\d$/u.test(word)).map((word) => Number(word.replace('−', '-')));
+  const directions = words.filter((word) => !/^[-−]?\d$/u.test(word));
+  return { ...(orders.length > 0 && { orders }), ...(directions.length > 0 && { directions }) };
+}

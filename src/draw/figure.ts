@@ -1,0 +1,156 @@
+import type { ClosedHabit } from '../habit/habit.ts';
+import { faceCorners } from '../polyhedron/measures.ts';
+import { faceLabels, type LabelKind, labelText } from './labels.ts';
+import { INK, PAPER, shaded, tintOf } from './palette.ts';
+import { type Bounds, boundsOf, type Placement, place, projectAll } from './project.ts';
+import { facePlanes, type LaidRods } from './rod-layout.ts';
+import { type RodPiece, rodPieces } from './rods.ts';
+import { closedPath, element, linePath, openPath } from './svg.ts';
+import { dot, type Point, unit, type Vector, vectorAt } from './vector.ts';
+import { type View, type ViewFrame, viewFrame } from './view.ts';
+import { look, type Sight } from './visible.ts';
+
+/** Line widths in pixels. */
+export interface LineWeights {
+  readonly outline: number;
+  readonly inner: number;
+  readonly hidden: number;
+}
+
+export interface FigureOptions {
+  readonly view: View;
+  /** `tinted`: a colour for each form, shaded. `lines`: lines on paper. */
+  readonly style: 'tinted' | 'lines';
+  /** Edges behind the body: thin and dashed, or left out. */
+  readonly hidden: 'thin' | 'none';
+  readonly labels: LabelKind | 'none';
+  readonly weights: LineWeights;
+  readonly rods: { readonly laid: LaidRods; readonly millimetresPerUnit: number } | null;
+}
+
+/** A crystal seen from a direction, ready to be put on a page. */
+export interface Figure {
+  /** Of body and rods, in the crystal's unit of length. */
+  readonly bounds: Bounds;
+  readonly frame: ViewFrame;
+  /** The picture as SVG elements. */
+  paint(placement: Placement): string;
+}
+
+/** To the light, in the directions of the page: from the upper left, and from the front. */
+const LIGHT: Vector = unit([-0.45, 0.6, 0.75]);
+
+export function figure(habit: ClosedHabit, options: FigureOptions): Figure {
+  const frame = viewFrame(options.view, habit.crystal.metric);
+  const sight = look(habit, frame.toward);
+  const vertices = projectAll(frame, habit.measures.positions);
+  const rods = piecesInUnits(habit, options.rods, frame);
+  return {
+    bounds: boundsOf([...vertices, ...rods.flatMap(({ outline }) => outline)]),
+    frame,
+    paint: (placement) => {
+      const at = vertices.map((point) => place(placement, point));
+      const placed = rods.map((piece) => moved(piece, (point) => place(placement, point)));
+      const before = placed.filter(({ layer }) => layer === 'before');
+      return [
+        ...placed.filter(({ layer }) => layer === 'behind').map(rodPath),
+        ...paintFaces(habit, sight, frame, at, options),
+        ...paintEdges(sight, at, options),
+        ...paintLabels(habit, sight, frame, at, before, options),
+        ...before.map(rodPath),
+      ].join('\n');
+    },
+  };
+}
+
+function piecesInUnits(habit: ClosedHabit, rods: FigureOptions['rods'], frame: ViewFrame): RodPiece[] {
+  if (!rods) return [];
+  const unitsPerMillimetre = 1 / rods.millimetresPerUnit;
+  return rodPieces(rods.laid, facePlanes(habit, rods.millimetresPerUnit), frame).map((piece) =>
+    moved(piece, ([x, y]) => [x * unitsPerMillimetre, y * unitsPerMillimetre]),
+  );
+}
+
+const moved = (piece: RodPiece, by: (point: Point) => Point): RodPiece => ({
+  ...piece,
+  outline: piece.outline.map(by),
+  rims: piece.rims.map((rim) => rim.map(by)),
+});
+
+const outlineOf = ({ solid }: ClosedHabit, face: number, at: readonly Point[]): Point[] =>
+  faceCorners(solid, face).map((vertex) => at[vertex]!);
+
+function colourOf({ solid, measures }: ClosedHabit, face: number, frame: ViewFrame, style: FigureOptions['style']) {
+  if (style === 'lines') return PAPER;
+  const normal = vectorAt(measures.normals, face);
+  const seen: Vector = [dot(frame.right, normal), dot(frame.up, normal), dot(frame.toward, normal)];
+  return shaded(tintOf(solid.planes.form[face]!), dot(seen, LIGHT));
+}
+
+/** Faces of a convex body do not overlap, so their order does not matter. */
+function paintFaces(
+  habit: ClosedHabit,
+  { front }: Sight,
+  frame: ViewFrame,
+  at: readonly Point[],
+  { style }: FigureOptions,
+): string[] {
+  return front.map((face) =>
+    element('path', { d: closedPath(outlineOf(habit, face, at)), fill: colourOf(habit, face, frame, style) }),
+  );
+}
+
+function paintEdges({ edges, silhouette }: Sight, at: readonly Point[], { hidden, weights }: FigureOptions): string[] {
+  const linesOf = (kind: string): string =>
+    linePath(edges.filter((edge) => edge.kind === kind).map(({ vertices: [p, q] }) => [at[p]!, at[q]!] as const));
+  const stroke = { fill: 'none', stroke: INK, 'stroke-linejoin': 'round', 'stroke-linecap': 'round' };
+  const [behind, inner] = [linesOf('hidden'), linesOf('inner')];
+  const dash = `${4 * weights.hidden} ${4 * weights.hidden}`;
+  return [
+    hidden === 'thin' && behind !== ''
+      ? element('path', {
+          d: behind,
+          ...stroke,
+          'stroke-linecap': 'butt',
+          'stroke-width': weights.hidden,
+          'stroke-dasharray': dash,
+          'stroke-opacity': 0.6,
+        })
+      : '',
+    inner === '' ? '' : element('path', { d: inner, ...stroke, 'stroke-width': weights.inner }),
+    element('path', { d: closedPath(silhouette.map((v) => at[v]!)), ...stroke, 'stroke-width': weights.outline }),
+  ].filter((part) => part !== '');
+}
+
+function paintLabels(
+  habit: ClosedHabit,
+  { front }: Sight,
+  frame: ViewFrame,
+  at: readonly Point[],
+  rods: readonly RodPiece[],
+  { labels, style }: FigureOptions,
+): string[] {
+  if (labels === 'none') return [];
+  const faces = front.map((face) => ({ face, outline: outlineOf(habit, face, at) }));
+  const obstacles = rods.filter(({ kind }) => kind === 'rod' || kind === 'side').map(({ outline }) => outline);
+  return faceLabels(habit, labels, faces, obstacles).map((label) =>
+    labelText(label, colourOf(habit, label.face, frame, style)),
+  );
+}
+
+const ROD_COLOURS: Readonly<Record<RodPiece['kind'], string>> = {
+  rod: '#4a5165',
+  side: '#5d6478',
+  symbol: INK,
+  hollow: PAPER,
+};
+
+/** Rods and plates get an ink rim, so that a plate seen edge-on stays a line. */
+function rodPath({ kind, outline, rims }: RodPiece): string {
+  const fill = ROD_COLOURS[kind];
+  // A stroke of the filling's own colour closes the hairline between two parts of one rod.
+  const part = element('path', { d: closedPath(outline), fill, stroke: fill, 'stroke-width': 0.5 });
+  if (rims.length === 0) return part;
+  const d = rims.map(openPath).join('');
+  return part + element('path', { d, fill: 'none', stroke: INK, 'stroke-linejoin': 'round' });
+}

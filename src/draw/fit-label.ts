@@ -1,0 +1,109 @@
+import { boundsOf, extentOf, signedArea } from './project.ts';
+import type { Point } from './vector.ts';
+
+/** Width and height of a label set in a type of size 1. */
+export interface LabelBox {
+  readonly width: number;
+  readonly height: number;
+}
+
+export interface LabelPlace {
+  readonly centre: Point;
+  /** The largest type size at which the label fits there, at most the one asked for. */
+  readonly size: number;
+}
+
+/** A straight line with `x·nx + y·ny + shift` growing into the room that is left for the label. */
+type HalfPlane = readonly [nx: number, ny: number, shift: number];
+
+/** Share of the best size that a label may give up to stand nearer to the middle of its face. */
+const PULL_TO_MIDDLE = 0.25;
+/** Free room about a label that is still worth having, as a multiple of the room that it needs. */
+const COMFORT = 1.5;
+/** Sides shorter than this, pixels, are rounding: their direction means nothing. */
+const SHORTEST = 1e-6;
+const GRID = 14;
+const REFINEMENTS = 14;
+
+/**
+ * Where a label fits best in a convex face, clear of convex obstacles, as in finding a polygon's pole of
+ * inaccessibility but for a box instead of a circle: a grid of trials, refined about the best.
+ * @param enough no larger type size is of use
+ */
+export function placeLabel(
+  face: readonly Point[],
+  { width, height }: LabelBox,
+  obstacles: readonly (readonly Point[])[],
+  enough: number,
+): LabelPlace {
+  const inside = inwardLines(face);
+  const around = obstacles.map(outwardLines);
+  /** Type size at which the box about (x, y) just touches the line; boxes are measured along the line's normal. */
+  const sizeAt = ([x, y]: Point, [nx, ny, shift]: HalfPlane): number =>
+    (x * nx + y * ny + shift) / ((Math.abs(nx) * width + Math.abs(ny) * height) / 2);
+  const room = (p: Point): number =>
+    Math.min(
+      ...inside.map((line) => sizeAt(p, line)),
+      // Two convex shapes are apart when a side of one of them separates them.
+      ...around.map((lines) => Math.max(...lines.map((line) => sizeAt(p, line)))),
+    );
+  const middle = centroid(face);
+  const bounds = boundsOf(face);
+  const extent = extentOf(bounds);
+  const across = Math.hypot(extent.width, extent.height);
+  const worth = (p: Point): number =>
+    Math.min(room(p), COMFORT * enough) *
+    (1 - (PULL_TO_MIDDLE * Math.hypot(p[0] - middle[0], p[1] - middle[1])) / across);
+
+  let best = middle;
+  const consider = (p: Point): void => {
+    if (worth(p) > worth(best)) best = p;
+  };
+  for (let i = 1; i < GRID; i++)
+    for (let j = 1; j < GRID; j++)
+      consider([bounds.low[0] + (extent.width * i) / GRID, bounds.low[1] + (extent.height * j) / GRID]);
+  for (let step = 0.5 / GRID, round = 0; round < REFINEMENTS; round++, step *= 0.7) {
+    const [x, y] = best;
+    for (const dx of [-1, 0, 1])
+      for (const dy of [-1, 0, 1]) consider([x + dx * step * extent.width, y + dy * step * extent.height]);
+  }
+  return { centre: best, size: Math.max(0, Math.min(room(best), enough)) };
+}
+
+/** The sides of a convex polygon, positive inside. */
+function inwardLines(polygon: readonly Point[]): HalfPlane[] {
+  const sense = Math.sign(signedArea(polygon));
+  return polygon.flatMap(([x, y], i): HalfPlane[] => {
+    const [nextX, nextY] = polygon[(i + 1) % polygon.length]!;
+    const length = Math.hypot(nextX - x, nextY - y);
+    if (length < SHORTEST) return [];
+    const [nx, ny] = [(sense * (y - nextY)) / length, (sense * (nextX - x)) / length];
+    return [[nx, ny, -(nx * x + ny * y)]];
+  });
+}
+
+/** Lines that keep a box off a convex polygon, positive outside: its sides, and the sides that a box has. */
+function outwardLines(polygon: readonly Point[]): HalfPlane[] {
+  const { low, high } = boundsOf(polygon);
+  return [
+    ...inwardLines(polygon).map(([nx, ny, shift]): HalfPlane => [-nx, -ny, -shift]),
+    [1, 0, -high[0]],
+    [-1, 0, low[0]],
+    [0, 1, -high[1]],
+    [0, -1, low[1]],
+  ];
+}
+
+export function centroid(polygon: readonly Point[]): Point {
+  const [x0, y0] = polygon[0]!;
+  let [x, y, area] = [0, 0, 0];
+  for (let i = 1; i + 1 < polygon.length; i++) {
+    const [ax, ay] = [polygon[i]![0] - x0, polygon[i]![1] - y0];
+    const [bx, by] = [polygon[i + 1]![0] - x0, polygon[i + 1]![1] - y0];
+    const twice = ax * by - ay * bx;
+    x += (twice * (ax + bx)) / 3;
+    y += (twice * (ay + by)) / 3;
+    area += twice;
+  }
+  return area === 0 ? [x0, y0] : [x0 + x / area, y0 + y / area];
+}

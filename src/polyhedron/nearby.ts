@@ -1,0 +1,223 @@
+import type { FacePolygon } from './clip.ts';
+import { CORNER } from './meet.ts';
+
+/**
+ * Which planes could cut a polygon at all, by bounds in doubles that always err towards "could". Index space is taken
+ * as if it were Euclidean: that changes no sign of h·x − D, and a bound needs no true lengths.
+ *
+ * Let plane p be û·x ≤ δ with |û| = 1, and let the polygon lie on a face with unit normal n̂, within radius r of the
+ * mean c of its corners. For a corner v = c + w, w is at right angles to n̂, hence û·w ≤ r·|û × n̂| and
+ *
+ *     û·v ≤ û·c + r·√(1 − (û·n̂)²).
+ *
+ * Where that stays below δ, p cuts nothing. Planes are sorted into cells of similar directions. For all planes of a
+ * cell with mean direction u and |û − u| ≤ e, the same bound holds with û·c ≤ u·c + e|c| and |û × n̂| ≤ |u × n̂| + e,
+ * and is compared with the smallest δ of the cell.
+ *
+ * Doubles: û, δ and c err by a few units of 2^-53, a corner by the bound that it carries (each coordinate, so less than
+ * 2 of it in length), and the mean is off the face's plane by no more; `DOUBT` and 8 such bounds are more than all that.
+ */
+export class Nearby {
+  /** Unit normal and distance of each plane, sorted by cell. */
+  private readonly unit: Float64Array;
+  /** Plane at each place of `unit`, and the place of each plane. */
+  private readonly plane: Int32Array;
+  private readonly place: Int32Array;
+  /** Where each cell begins in `unit`. */
+  private readonly start: Int32Array;
+  /** The cell of each plane. */
+  private readonly cellOf: Int32Array;
+  /** For each cell: mean direction u, |u|², e, smallest δ. */
+  private readonly cells: Float64Array;
+  /** For the polygon at hand: c, |c|, r, and the bound of errors. */
+  private readonly ball = new Float64Array(6);
+
+  /** @param rows h1, h2, h3, D of each plane; those after the first `count` are left out */
+  constructor(rows: Float64Array, count: number) {
+    const side = Math.max(1, Math.round(Math.sqrt(count / PLANES_A_CELL / 6)));
+    this.cellOf = new Int32Array(count);
+    this.start = new Int32Array(6 * side * side + 1);
+    for (let p = 0; p < count; p++) {
+      const cell = cellOfDirection(rows[4 * p]!, rows[4 * p + 1]!, rows[4 * p + 2]!, side);
+      this.cellOf[p] = cell;
+      this.start[cell + 1]! += 1;
+    }
+    for (let cell = 1; cell < this.start.length; cell++) this.start[cell]! += this.start[cell - 1]!;
+    this.unit = new Float64Array(4 * count);
+    this.plane = new Int32Array(count);
+    this.place = new Int32Array(count);
+    this.sort(rows);
+    this.cells = new Float64Array((this.start.length - 1) * CELL);
+    for (let cell = 0; cell + 1 < this.start.length; cell++) this.measureCell(cell);
+  }
+
+  /** The plane nearest to the origin; the first of several. */
+  nearest(): number {
+    const { unit, plane } = this;
+    let best = 0;
+    for (let i = 1; i < plane.length; i++) {
+      const gap = unit[4 * i + 3]! - unit[4 * best + 3]!;
+      if (gap < 0 || (gap === 0 && plane[i]! < plane[best]!)) best = i;
+    }
+    return plane[best]!;
+  }
+
+  /** Cuts a polygon with every plane that may reach it, those of similar direction first. */
+  cut(polygon: FacePolygon): void {
+    const { start, cellOf, place, unit } = this;
+    const count = start.length - 1;
+    const first = cellOf[polygon.face]!;
+    const at = 4 * place[polygon.face]!;
+    const nx = unit[at]!;
+    const ny = unit[at + 1]!;
+    const nz = unit[at + 2]!;
+    this.enclose(polygon);
+    for (let k = 0; k < count && polygon.size > 0; k++) {
+      const cell = first + k < count ? first + k : first + k - count;
+      if (this.cellReaches(cell, nx, ny, nz)) this.cutWithCell(cell, polygon, nx, ny, nz);
+    }
+  }
+
+  private cutWithCell(cell: number, polygon: FacePolygon, nx: number, ny: number, nz: number): void {
+    const { unit, plane, ball } = this;
+    let cx = ball[0]!;
+    let cy = ball[1]!;
+    let cz = ball[2]!;
+    let square = ball[4]! * ball[4]!;
+    let doubt = ball[5]!;
+    const end = this.start[cell + 1]!;
+    for (let i = this.start[cell]!; i < end; i++) {
+      const x = unit[4 * i]!;
+      const y = unit[4 * i + 1]!;
+      const z = unit[4 * i + 2]!;
+      const gap = unit[4 * i + 3]! - (x * cx + y * cy + z * cz) - doubt;
+      const along = x * nx + y * ny + z * nz;
+      if (gap > 0 && gap * gap > square * (1 - along * along + DOUBT)) continue;
+      if (!polygon.cut(plane[i]!)) continue;
+      if (polygon.size === 0) return;
+      this.enclose(polygon);
+      cx = ball[0]!;
+      cy = ball[1]!;
+      cz = ball[2]!;
+      square = ball[4]! * ball[4]!;
+      doubt = ball[5]!;
+    }
+  }
+
+  private cellReaches(cell: number, nx: number, ny: number, nz: number): boolean {
+    const { cells, ball } = this;
+    const at = cell * CELL;
+    const x = cells[at]!;
+    const y = cells[at + 1]!;
+    const z = cells[at + 2]!;
+    const farthest = x * ball[0]! + y * ball[1]! + z * ball[2]! + cells[at + 4]! * (ball[3]! + ball[4]!);
+    const gap = cells[at + 5]! - farthest - ball[5]!;
+    const along = x * nx + y * ny + z * nz;
+    return !(gap > 0 && gap * gap > ball[4]! * ball[4]! * (cells[at + 3]! - along * along + DOUBT));
+  }
+
+  /** The mean of the corners, and a radius about it. */
+  private enclose({ corners, size, worst }: FacePolygon): void {
+    let cx = 0;
+    let cy = 0;
+    let cz = 0;
+    for (let at = 0; at < size * CORNER; at += CORNER) {
+      cx += corners[at]!;
+      cy += corners[at + 1]!;
+      cz += corners[at + 2]!;
+    }
+    cx /= size;
+    cy /= size;
+    cz /= size;
+    let square = 0;
+    for (let at = 0; at < size * CORNER; at += CORNER) {
+      const x = corners[at]! - cx;
+      const y = corners[at + 1]! - cy;
+      const z = corners[at + 2]! - cz;
+      square = Math.max(square, x * x + y * y + z * z);
+    }
+    const { ball } = this;
+    ball[0] = cx;
+    ball[1] = cy;
+    ball[2] = cz;
+    ball[3] = Math.sqrt(cx * cx + cy * cy + cz * cz);
+    ball[4] = Math.sqrt(square);
+    ball[5] = 8 * worst + DOUBT * (ball[3] + ball[4]);
+  }
+
+  private sort(rows: Float64Array): void {
+    const { start, cellOf, plane, place, unit } = this;
+    const next = start.slice();
+    for (let p = 0; p < place.length; p++) {
+      const i = next[cellOf[p]!]!++;
+      plane[i] = p;
+      place[p] = i;
+      const x = rows[4 * p]!;
+      const y = rows[4 * p + 1]!;
+      const z = rows[4 * p + 2]!;
+      const length = Math.sqrt(x * x + y * y + z * z);
+      unit[4 * i] = x / length;
+      unit[4 * i + 1] = y / length;
+      unit[4 * i + 2] = z / length;
+      // Shortened by more than its rounding.
+      const distance = rows[4 * p + 3]! / length;
+      unit[4 * i + 3] = distance - DOUBT * Math.abs(distance);
+    }
+  }
+
+  private measureCell(cell: number): void {
+    const { start, unit, cells } = this;
+    const [from, to] = [4 * start[cell]!, 4 * start[cell + 1]!];
+    if (from === to) {
+      cells[cell * CELL + 5] = Number.POSITIVE_INFINITY;
+      return;
+    }
+    let x = 0;
+    let y = 0;
+    let z = 0;
+    let nearest = Number.POSITIVE_INFINITY;
+    let square = 0;
+    for (let i = from; i < to; i += 4) {
+      x += unit[i]!;
+      y += unit[i + 1]!;
+      z += unit[i + 2]!;
+      if (unit[i + 3]! < nearest) nearest = unit[i + 3]!;
+    }
+    const share = 4 / (to - from);
+    x *= share;
+    y *= share;
+    z *= share;
+    for (let i = from; i < to; i += 4) {
+      const [dx, dy, dz] = [unit[i]! - x, unit[i + 1]! - y, unit[i + 2]! - z];
+      square = Math.max(square, dx * dx + dy * dy + dz * dz);
+    }
+    const at = cell * CELL;
+    cells[at] = x;
+    cells[at + 1] = y;
+    cells[at + 2] = z;
+    cells[at + 3] = x * x + y * y + z * z;
+    cells[at + 4] = Math.sqrt(square) + DOUBT;
+    cells[at + 5] = nearest;
+  }
+}
+
+/** Numbers kept for a cell. */
+const CELL = 6;
+const PLANES_A_CELL = 8;
+const DOUBT = 2 ** -44;
+
+/** Cells are squares on the sides of a cube around the origin, `side` along each edge. */
+function cellOfDirection(x: number, y: number, z: number, side: number): number {
+  const ax = Math.abs(x);
+  const ay = Math.abs(y);
+  const az = Math.abs(z);
+  if (ax >= ay && ax >= az) return square(x > 0 ? 0 : 1, y / ax, z / ax, side);
+  if (ay >= az) return square(y > 0 ? 2 : 3, z / ay, x / ay, side);
+  return square(z > 0 ? 4 : 5, x / az, y / az, side);
+}
+
+function square(ofCube: number, s: number, t: number, side: number): number {
+  const i = Math.min(side - 1, Math.floor(((s + 1) / 2) * side));
+  const j = Math.min(side - 1, Math.floor(((t + 1) / 2) * side));
+  return (ofCube * side + i) * side + j;
+}

@@ -1,0 +1,85 @@
+import load, { type Manifold, type ManifoldToplevel, type Mat4, type Polygons } from 'manifold-3d';
+import type { Mesh } from './mesh.ts';
+import { withoutShortEdges } from './short-edges.ts';
+
+let loading: Promise<ManifoldToplevel> | undefined;
+
+/** The boolean library, loaded once. */
+function library(): Promise<ManifoldToplevel> {
+  loading ??= load().then((kit) => {
+    kit.setup();
+    return kit;
+  });
+  return loading;
+}
+
+/**
+ * Runs work on solids and afterwards frees all that it made; the library's memory is not swept by JavaScript.
+ * Only meshes may leave.
+ */
+export async function withSolids<T>(work: (bench: Workbench) => T): Promise<T> {
+  const bench = new Workbench(await library());
+  try {
+    return work(bench);
+  } finally {
+    bench.clear();
+  }
+}
+
+/** The few solid operations that printable parts need. Lengths in millimetres. */
+export class Workbench {
+  private readonly made: { delete(): void }[] = [];
+
+  constructor(private readonly kit: ManifoldToplevel) {}
+
+  clear(): void {
+    for (const thing of this.made.splice(0)) thing.delete();
+  }
+
+  private keep<T extends { delete(): void }>(thing: T): T {
+    this.made.push(thing);
+    return thing;
+  }
+
+  /** @throws Error when the mesh is no closed solid */
+  solid({ positions, triangles }: Mesh): Manifold {
+    const mesh = new this.kit.Mesh({
+      numProp: 3,
+      vertProperties: Float32Array.from(positions),
+      triVerts: Uint32Array.from(triangles),
+    });
+    return this.keep(new this.kit.Manifold(mesh));
+  }
+
+  /** A straight prism over outlines (counter-clockwise, holes clockwise), from z = `from` to z = `to`. */
+  prism(outlines: readonly (readonly (readonly [number, number])[])[], from: number, to: number): Manifold {
+    const contours: Polygons = outlines.map((outline) => outline.map(([x, y]): [number, number] => [x, y]));
+    const upright = this.keep(this.kit.Manifold.extrude(contours, to - from));
+    return this.keep(upright.translate(0, 0, from));
+  }
+
+  union(solids: readonly Manifold[]): Manifold {
+    return solids.length === 1 ? solids[0]! : this.keep(this.kit.Manifold.union(solids));
+  }
+
+  subtract(body: Manifold, tools: readonly Manifold[]): Manifold {
+    return tools.length === 0 ? body : this.keep(this.kit.Manifold.difference([body, ...tools]));
+  }
+
+  /** `matrix` by columns, the fourth being the shift. */
+  place(solid: Manifold, matrix: Mat4): Manifold {
+    return this.keep(solid.transform(matrix));
+  }
+
+  /** The finished mesh, without edges that are too short for single precision. */
+  mesh(solid: Manifold): Mesh {
+    const { vertProperties, triVerts, numProp } = this.keep(solid.simplify(SHORTEST_EDGE)).getMesh();
+    const positions = new Float64Array((vertProperties.length / numProp) * 3);
+    for (let v = 0; v * 3 < positions.length; v++)
+      positions.set(vertProperties.subarray(v * numProp, v * numProp + 3), 3 * v);
+    return withoutShortEdges({ positions, triangles: Uint32Array.from(triVerts) }, SHORTEST_EDGE);
+  }
+}
+
+/** Millimetres; far below what any printer resolves. */
+const SHORTEST_EDGE = 0.001;

@@ -1,0 +1,48 @@
+import type { Mesh } from './mesh.ts';
+
+/** A thing to print. */
+export interface Part {
+  /** Short and fit for a file name: `body`, `rod-3`, `cap-3`. */
+  readonly name: string;
+  /** What it is for, in words. */
+  readonly purpose: string;
+  /** As it lies on the bed. */
+  readonly mesh: Mesh;
+  /** Where each copy sits in the finished object; one mesh a copy. */
+  readonly placed: readonly Mesh[];
+}
+
+/** All parts in their places as one mesh. Its solids stay separate where the parts are. */
+export function assemble(parts: readonly Part[]): Mesh {
+  const meshes = parts.flatMap(({ placed }) => placed);
+  const [only, ...others] = meshes;
+  if (only && others.length === 0) return only;
+  const positions = new Float64Array(meshes.reduce((sum, mesh) => sum + mesh.positions.length, 0));
+  const triangles = new Uint32Array(meshes.reduce((sum, mesh) => sum + mesh.triangles.length, 0));
+  let [point, corner] = [0, 0];
+  for (const mesh of meshes) {
+    positions.set(mesh.positions, point);
+    triangles.set(
+      mesh.triangles.map((vertex) => vertex + point / 3),
+      corner,
+    );
+    point += mesh.positions.length;
+    corner += mesh.triangles.length;
+  }
+  return { positions, triangles };
+}
+
+/** Moves meshes together so that their common box starts at the origin: the corner of a printer's bed. */
+export function ontoBed(meshes: readonly Mesh[]): Mesh[] {
+  const low = [0, 1, 2].map((axis) =>
+    meshes.reduce((least, { positions }) => {
+      let own = least;
+      for (let at = axis; at < positions.length; at += 3) own = Math.min(own, positions[at]!);
+      return own;
+    }, Number.POSITIVE_INFINITY),
+  );
+  return meshes.map(({ positions, triangles }) => ({
+    positions: positions.map((value, i) => value - low[i % 3]!),
+    triangles,
+  }));
+}

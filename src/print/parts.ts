@@ -1,0 +1,53 @@
+import { axisLines } from '../habit/axis-ends.ts';
+import type { ClosedHabit } from '../habit/habit.ts';
+import type { PrintPlan } from '../recipe/crystal.ts';
+import { crystalMesh } from './body.ts';
+import { fuseRods } from './fused-rods.ts';
+import { withSolids } from './kit.ts';
+import { ontoBed, type Part } from './part.ts';
+import { planRods } from './rod-plan.ts';
+import { boreForRods } from './separate-rods.ts';
+
+export interface PrintedModel {
+  readonly parts: readonly Part[];
+  /** Sentences about what was decided on the way. */
+  readonly remarks: readonly string[];
+}
+
+/** Makes the printable parts of a crystal at its size. @throws PrintError */
+export async function printedParts(
+  habit: ClosedHabit,
+  scale: number,
+  { axes, printer }: PrintPlan,
+): Promise<PrintedModel> {
+  const crystal = crystalMesh(habit, scale);
+  if (!axes) return { parts: [bodyPart('the crystal', crystal)], remarks: [] };
+  if (!axes.orders && !axes.directions && axisLines(habit.crystal, axes).length === 0)
+    return {
+      parts: [bodyPart('the crystal', crystal)],
+      remarks: [`Point group ${habit.crystal.group.hermannMauguin} has no symmetry axes, so there are no rods.`],
+    };
+  const plan = planRods(habit, scale, axes);
+  const thin =
+    axes.diameter < printer.rod.smallest
+      ? [
+          `Rods of ${axes.diameter} mm are thinner than the ${printer.rod.smallest} mm that "${printer.name}" prints reliably.`,
+        ]
+      : [];
+  return withSolids((bench) => {
+    const body = bench.solid(crystal);
+    if (axes.fit === 'fused') {
+      const mesh = bench.mesh(fuseRods(bench, body, plan));
+      return { parts: [bodyPart('the crystal with its symmetry axes', mesh)], remarks: [...plan.remarks, ...thin] };
+    }
+    const bored = boreForRods(bench, body, plan, printer.rod.clearance);
+    return {
+      parts: [bodyPart('the crystal, bored for its rods', bench.mesh(bored.body)), ...bored.rods],
+      remarks: [...plan.remarks, ...bored.remarks, ...thin],
+    };
+  });
+}
+
+function bodyPart(purpose: string, mesh: Part['mesh']): Part {
+  return { name: 'body', purpose, mesh: ontoBed([mesh])[0]!, placed: [mesh] };
+}
