@@ -48,7 +48,7 @@ export async function makeModel(resolved: Resolved): Promise<Made> {
   const scale = millimetresPerUnit(habit, print.size ?? USUAL_SIZE);
   const { parts, remarks } = await printedParts(habit, scale, print);
   const stem = fileStem(resolved);
-  const titled = (what: string): string => `${crystal.title}, ${crystal.group.hermannMauguin}, ${what}`;
+  const titled = (what: string): string => `${crystal.title}: ${what}`;
   const write = (name: string, holds: string, mesh: Mesh): MadeFile =>
     writeChecked(name, holds, mesh, titled(holds), print.stl);
   const whole = ontoBed([assemble(parts)])[0]!;

@@ -5,8 +5,7 @@ import { assertFileNames } from './file-names.ts';
 import { replaceAll } from './replace-all.ts';
 import { addTemporary, forgetTemporary, temporaryName } from './temporaries.ts';
 
-export { DiskError, type DiskErrorCode } from './disk-error.ts';
-export type { DiskOperations } from './disk-operations.ts';
+export { DiskError } from './disk-error.ts';
 export { removeTemporaries } from './temporaries.ts';
 
 /** How often another temporary name is tried when one is taken by what an earlier crash left behind. */
@@ -46,7 +45,8 @@ export async function writeFiles(
     for (const { name } of files) await assertReplaceable(disk, join(folder, name));
     for (const { name, bytes } of files) {
       const temporary = await writeTemporary(disk, folder, name, bytes, temporaries);
-      options.onVerify?.(name, await readBack(disk, temporary, join(folder, name), bytes));
+      const read = await readBack(disk, temporary, join(folder, name), bytes);
+      options.onVerify?.(name, read);
     }
     replaceAll(
       disk,

@@ -2,7 +2,7 @@ import type { ClosedHabit } from '../habit/habit.ts';
 import { faceCorners } from '../polyhedron/measures.ts';
 import { faceLabels, type LabelKind, labelText } from './labels.ts';
 import { INK, PAPER, shaded, tintOf } from './palette.ts';
-import { type Bounds, boundsOf, type Placement, place, projectAll } from './project.ts';
+import { type Bounds, boundsOf, hull, type Placement, place, projectAll } from './project.ts';
 import { facePlanes, type LaidRods } from './rod-layout.ts';
 import { type RodPiece, rodPieces } from './rods.ts';
 import { closedPath, element, linePath, openPath } from './svg.ts';
@@ -132,7 +132,7 @@ function paintLabels(
 ): string[] {
   if (labels === 'none') return [];
   const faces = front.map((face) => ({ face, outline: outlineOf(habit, face, at) }));
-  const obstacles = rods.filter(({ kind }) => kind === 'rod' || kind === 'side').map(({ outline }) => outline);
+  const obstacles = rods.filter(({ kind }) => kind === 'rod' || kind === 'side').map(({ outline }) => hull(outline));
   return faceLabels(habit, labels, faces, obstacles).map((label) =>
     labelText(label, colourOf(habit, label.face, frame, style)),
   );

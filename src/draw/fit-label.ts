@@ -37,7 +37,7 @@ export function placeLabel(
   enough: number,
 ): LabelPlace {
   const inside = inwardLines(face);
-  const around = obstacles.map(outwardLines);
+  const around = obstacles.filter((obstacle) => boundsOverlap(obstacle, face)).map(outwardLines);
   /** Type size at which the box about (x, y) just touches the line; boxes are measured along the line's normal. */
   const sizeAt = ([x, y]: Point, [nx, ny, shift]: HalfPlane): number =>
     (x * nx + y * ny + shift) / ((Math.abs(nx) * width + Math.abs(ny) * height) / 2);
@@ -68,6 +68,12 @@ export function placeLabel(
       for (const dy of [-1, 0, 1]) consider([x + dx * step * extent.width, y + dy * step * extent.height]);
   }
   return { centre: best, size: Math.max(0, Math.min(room(best), enough)) };
+}
+
+/** Whether two polygons might meet. */
+function boundsOverlap(a: readonly Point[], b: readonly Point[]): boolean {
+  const [p, q] = [boundsOf(a), boundsOf(b)];
+  return [0, 1].every((axis) => p.low[axis]! <= q.high[axis]! && q.low[axis]! <= p.high[axis]!);
 }
 
 /** The sides of a convex polygon, positive inside. */

@@ -9,19 +9,19 @@ export const RULE = '#dedacd';
 /**
  * Tints of the forms, in the recipe's order; after the last they start again. Hues after the colours of Okabe and Ito
  * (Color Universal Design, 2008), which people with any usual colour vision tell apart, mixed with paper; every tint
- * also has a lightness of its own, and the first ones differ most, so that they stay apart in grey.
+ * also has a lightness of its own, far from the next one's, so that they stay apart in grey.
  */
 export const FORM_TINTS: readonly string[] = [
-  '#84a3cb', // blue
+  '#86a5cd', // blue
   '#edc28b', // orange
   '#7fb99f', // bluish green
   '#f3e7ab', // yellow
-  '#d98c6c', // vermilion
-  '#b4dcef', // sky blue
-  '#d6a6c4', // reddish purple
-  '#a9a59b', // stone
-  '#d2dcb4', // moss
-  '#efe9df', // chalk
+  '#d58867', // vermilion
+  '#bae1f3', // sky blue
+  '#dfb0cd', // reddish purple
+  '#f3ede2', // chalk
+  '#b9b5ab', // stone
+  '#cbd5ab', // moss
 ];
 
 export const tintOf = (form: number): string => FORM_TINTS[form % FORM_TINTS.length]!;

@@ -23,8 +23,11 @@ export interface ViewFrame {
   readonly toward: Vector;
 }
 
-/** Chosen so that no face of {100}, {110}, {111} or of a hexagonal prism is seen edge-on, and none hides another. */
-export const GENERAL_VIEW = { turn: 20, tilt: 15 } as const;
+/**
+ * Near the directions that textbooks use. No face of the cube, octahedron, rhomb-dodecahedron or of a hexagonal prism in
+ * either position is within 5° of being seen edge-on.
+ */
+export const GENERAL_VIEW = { turn: 21, tilt: 13 } as const;
 
 /** Sine of the angle to c below which the view counts as straight along it; far above rounding, far below any zone. */
 const STRAIGHT = 1e-9;

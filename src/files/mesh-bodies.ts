@@ -87,19 +87,19 @@ function measureShell(
   const o = 3 * triangles[3 * members[0]!]!;
   const min: [number, number, number] = [Infinity, Infinity, Infinity];
   const max: [number, number, number] = [-Infinity, -Infinity, -Infinity];
-  let volume = 0;
-  let area = 0;
+  let sixVolumes = 0;
+  let twoAreas = 0;
   for (const t of members) {
     const [a, b, c] = [3 * triangles[3 * t]!, 3 * triangles[3 * t + 1]!, 3 * triangles[3 * t + 2]!];
     const [ux, uy, uz] = [p[b]! - p[a]!, p[b + 1]! - p[a + 1]!, p[b + 2]! - p[a + 2]!];
     const [vx, vy, vz] = [p[c]! - p[a]!, p[c + 1]! - p[a + 1]!, p[c + 2]! - p[a + 2]!];
     const [nx, ny, nz] = [uy * vz - uz * vy, uz * vx - ux * vz, ux * vy - uy * vx];
-    volume += ((p[a]! - p[o]!) * nx + (p[a + 1]! - p[o + 1]!) * ny + (p[a + 2]! - p[o + 2]!) * nz) / 6;
-    area += Math.sqrt(nx * nx + ny * ny + nz * nz) / 2;
+    sixVolumes += (p[a]! - p[o]!) * nx + (p[a + 1]! - p[o + 1]!) * ny + (p[a + 2]! - p[o + 2]!) * nz;
+    twoAreas += Math.sqrt(nx * nx + ny * ny + nz * nz);
     for (let axis = 0; axis < 3; axis++) {
       min[axis] = Math.min(min[axis]!, p[a + axis]!, p[b + axis]!, p[c + axis]!);
       max[axis] = Math.max(max[axis]!, p[a + axis]!, p[b + axis]!, p[c + axis]!);
     }
   }
-  return { volume, area, extents: { min, max } };
+  return { volume: sixVolumes / 6, area: twoAreas / 2, extents: { min, max } };
 }

@@ -10,17 +10,7 @@ import { examineTriangles } from './mesh-triangles.ts';
 import { examineVertices } from './mesh-vertices.ts';
 import { assertFinite, assertWholeMesh } from './sound-mesh.ts';
 
-export type {
-  Body,
-  BodyKind,
-  Extents,
-  Finding,
-  MeshReport,
-  Place,
-  Point,
-  Problem,
-  ProblemCode,
-} from './mesh-report.ts';
+export type { MeshReport, ProblemCode } from './mesh-report.ts';
 
 /**
  * Whether a mesh bounds solids that can be printed, and everything that is wrong with it. Check what will be written

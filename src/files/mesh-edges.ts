@@ -51,8 +51,8 @@ export function examineEdges(mesh: Mesh, collapsed: Uint8Array): EdgeFacts {
 }
 
 function placeOfEdge(mesh: Mesh, uses: Uint32Array): Place {
-  const points = [pointOf(mesh, startOf(mesh, uses[0]!)), pointOf(mesh, endOf(mesh, uses[0]!))];
-  return { points, triangles: Array.from(uses, triangleOf) };
+  const ends = [startOf(mesh, uses[0]!), endOf(mesh, uses[0]!)].sort((a, b) => a - b);
+  return { points: ends.map((end) => pointOf(mesh, end)), triangles: Array.from(uses, triangleOf) };
 }
 
 /** As many uses in one direction as in the other. */

@@ -8,7 +8,7 @@ import type { Point } from './mesh-report.ts';
  * A vertex counts as lying on an edge when it is no farther off than this many float32 steps at the mesh's greatest
  * coordinate: rounding moves each of the three points by half a step along each axis.
  */
-export const T_JUNCTION_STEPS = 2;
+const T_JUNCTION_STEPS = 2;
 /** One step of float32 relative to the number, at most. */
 const FLOAT32_STEP = 2 ** -23;
 

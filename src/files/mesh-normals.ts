@@ -1,7 +1,7 @@
 import type { Mesh } from '../print/mesh.ts';
 
 /** How far a stored normal may be off, in degrees. */
-export const NORMAL_TOLERANCE_DEGREES = 1;
+const NORMAL_TOLERANCE_DEGREES = 1;
 const LEAST_COSINE = Math.cos((NORMAL_TOLERANCE_DEGREES * Math.PI) / 180);
 
 export interface NormalFacts {

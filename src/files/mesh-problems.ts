@@ -21,7 +21,8 @@ function edgeProblems(facts: MeshFacts): Problem[] {
     ...tell('overusedEdges', overusedEdges, (n) =>
       [
         `${count(n, 'edge is', 'edges are')} shared by more than two triangles (first ${edge(overusedEdges)},`,
-        `${overusedEdges.first[0]!.triangles.length} triangles): solids meet along an edge, or a wall has no thickness.`,
+        `${overusedEdges.first[0]!.triangles.length} triangles):`,
+        'solids meet along an edge, or a wall has no thickness.',
       ].join(' '),
     ),
     ...tell('flippedEdges', flippedEdges, (n) =>
@@ -76,8 +77,9 @@ function vertexProblems(facts: MeshFacts): Problem[] {
     ),
     ...tell('selfTouching', selfTouching, (n) =>
       [
-        `${selfTouchingCounted ? '' : 'At least '}${count(n, 'pair of triangles crosses or touches', 'pairs of triangles cross or touch')}`,
-        `where ${n === 1 ? 'it shares' : 'they share'} no corner or edge (first near ${spell(selfTouching.first[0]!.points[0]!)}).`,
+        (selfTouchingCounted ? '' : 'At least ') + count(n, 'pair of triangles crosses', 'pairs of triangles cross'),
+        'or touch where there is no common corner or edge',
+        `(first near ${spell(selfTouching.first[0]!.points[0]!)}).`,
       ].join(' '),
     ),
   ];

@@ -78,11 +78,11 @@ export interface MeshReport {
   readonly overusedEdges: Finding;
   /** Edges that two triangles use in the same direction: one of them is turned the wrong way round. */
   readonly flippedEdges: Finding;
-  /** Triangles with a repeated vertex or without area (see `ZERO_HEIGHT`). */
+  /** Triangles with a repeated vertex or without area (see `mesh-triangles.ts`). */
   readonly degenerateTriangles: Finding;
   /** Triangles on the same three points as an earlier one, whichever way round. */
   readonly duplicateTriangles: Finding;
-  /** Ends of open edges that lie within another open edge (see `T_JUNCTION_STEPS`). */
+  /** Ends of open edges that lie within another open edge (see `mesh-junctions.ts`). */
   readonly tJunctions: Finding;
   /** Vertices at the place of an earlier vertex with another number. */
   readonly coincidentVertices: Finding;
@@ -90,7 +90,7 @@ export interface MeshReport {
   readonly negativeZeros: number;
   /** Vertices in which several fans of triangles meet that share no edge there. */
   readonly pinchedVertices: Finding;
-  /** Pairs of triangles that meet otherwise than in common corners or a common edge: crossing, touching, overlapping. */
+  /** Pairs of triangles that meet elsewhere than in common corners or a common edge. */
   readonly selfTouching: Finding;
   /** False when there were so many such pairs that counting stopped. */
   readonly selfTouchingCounted: boolean;

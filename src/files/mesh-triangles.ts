@@ -7,7 +7,7 @@ import { numberRows } from './number-rows.ts';
  * alone leaves less than 1e-15 of it on three points in line (two products and a difference of exact differences), so
  * the bound is a thousand times that; a height which matters in print is many orders of magnitude above it.
  */
-export const ZERO_HEIGHT = 1e-12;
+const ZERO_HEIGHT = 1e-12;
 
 /** What the triangles are, each taken by itself. */
 export interface TriangleFacts {

@@ -23,8 +23,8 @@ export function assertWholeMesh({ positions, triangles }: Mesh): void {
   const vertices = positions.length / 3;
   for (let i = 0; i < triangles.length; i++) {
     if (triangles[i]! < vertices) continue;
-    const what = `Triangle ${Math.floor(i / 3) + 1} names vertex ${triangles[i]}, but the mesh has ${vertices} vertices`;
-    throw new FileError('badMesh', `${what} (counted from 0).`, hint);
+    const what = `Triangle ${Math.floor(i / 3)} names vertex ${triangles[i]} (both counted from 0)`;
+    throw new FileError('badMesh', `${what}, but the mesh has only ${vertices} vertices.`, hint);
   }
 }
 

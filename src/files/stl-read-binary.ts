@@ -46,7 +46,8 @@ function countFacets(bytes: Uint8Array): number {
   if (bytes.length < expected)
     throw new FileError(
       'truncated',
-      `The STL file promises ${promised} facets but breaks off after ${held}: ${expected - bytes.length} bytes are missing.`,
+      `The STL file promises ${promised} facets but breaks off after ${held}: ` +
+        `${expected - bytes.length} bytes are missing.`,
       'Copy or export the file again; the end of it was lost.',
     );
   throw new FileError(

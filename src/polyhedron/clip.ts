@@ -1,5 +1,7 @@
 import { CORNER, meet } from './meet.ts';
-import { exactCross, exactSide, type SidePlanes, ULP } from './side.ts';
+import { PLANE, type PlaneTable } from './plane-table.ts';
+import { doubles, integers, signs, withRoom } from './room.ts';
+import { exactCross, exactSide, ULP } from './side.ts';
 
 /**
  * One face's polygon while other planes cut it. It is kept as the ring of neighbour planes, counter-clockwise seen
@@ -10,34 +12,35 @@ export class FacePolygon {
   face = -1;
   /** How many neighbours, and corners, there are; 0 once nothing is left of the face. */
   size = 0;
-  ring: Int32Array = new Int32Array(32);
+  ring = integers(32);
   /** x, y, z, error of each corner. */
-  corners: Float64Array = new Float64Array(32 * CORNER);
-  private spareRing: Int32Array = new Int32Array(32);
-  private spareCorners: Float64Array = new Float64Array(32 * CORNER);
-  private sides: Int8Array = new Int8Array(32);
+  corners = doubles(32 * CORNER);
   /** The largest coordinate and the largest error of any corner. */
   reach = 0;
   worst = 0;
-  /** The face for which each plane was last tried: no plane is tried twice on one face. */
-  private readonly tried: Int32Array;
+  private spareRing = integers(32);
+  private spareCorners = doubles(32 * CORNER);
+  private sides = signs(32);
+  /** A new number for each face, so that marks of earlier ones need not be wiped. */
+  private turn = 0;
+  /** The turn in which each plane was last tried: no plane is tried twice on one face. */
+  private tried = integers(64);
+  /** The turn in which each neighbour was last settled, and its own neighbours round the two corners. */
+  private settled = integers(64);
+  private previous = integers(64);
+  private next = integers(64);
 
-  /** @param frame number of the first of six sides of a cube that holds all corners; they follow the planes */
-  constructor(
-    private readonly planes: SidePlanes,
-    private readonly frame: number,
-  ) {
-    this.tried = new Int32Array(frame).fill(-1);
-  }
+  constructor(private readonly planes: PlaneTable) {}
 
   /** Begins with all of a face's plane that lies in the frame. */
   begin(face: number): void {
-    const { planes, frame, ring } = this;
+    const { ring } = this;
+    const { rows: h, count: frame } = this.planes;
+    this.makeMarks(frame + 6);
     this.face = face;
     this.size = 4;
-    this.tried[face] = face;
-    const at = 4 * face;
-    const h = planes.rows;
+    this.tried[face] = this.turn;
+    const at = PLANE * face;
     const [x, y, z] = [Math.abs(h[at]!), Math.abs(h[at + 1]!), Math.abs(h[at + 2]!)];
     const k = x >= y && x >= z ? 0 : y >= z ? 1 : 2;
     const turn = h[at + k]! > 0 ? 0 : 2;
@@ -50,16 +53,37 @@ export class FacePolygon {
     this.measure();
   }
 
+  /**
+   * Cuts with a neighbour whose own polygon is finished, and with the two planes beside this face in its ring: on this
+   * face they come right before and right after it, unless more than three planes meet in the corner.
+   */
+  settle(neighbour: number, previous: number, next: number): void {
+    this.settled[neighbour] = this.turn;
+    this.previous[neighbour] = previous;
+    this.next[neighbour] = next;
+    this.cut(neighbour);
+    this.cut(previous);
+    this.cut(next);
+  }
+
+  /** Whether corner i is known as a vertex of the solid, because it is a corner of a finished face as well. */
+  isSettled(i: number): boolean {
+    const before = this.ring[i]!;
+    const after = this.ring[i + 1 === this.size ? 0 : i + 1]!;
+    if (this.settled[before] === this.turn && this.next[before] === after) return true;
+    return this.settled[after] === this.turn && this.previous[after] === before;
+  }
+
   /** Takes away what lies outside plane p, if that has not been done. Answers whether a corner has gone. */
   cut(p: number): boolean {
-    if (this.tried[p] === this.face) return false;
-    this.tried[p] = this.face;
-    const { corners, sides, size } = this;
-    const { rows } = this.planes;
-    const hx = rows[4 * p]!;
-    const hy = rows[4 * p + 1]!;
-    const hz = rows[4 * p + 2]!;
-    const offset = rows[4 * p + 3]!;
+    const { corners, sides, size, planes, tried } = this;
+    if (p >= planes.count || size === 0 || tried[p] === this.turn) return false;
+    tried[p] = this.turn;
+    const { rows } = planes;
+    const hx = rows[PLANE * p]!;
+    const hy = rows[PLANE * p + 1]!;
+    const hz = rows[PLANE * p + 2]!;
+    const offset = rows[PLANE * p + 3]!;
     // Three products, three sums and the offset's own rounding, besides the error of the corner itself.
     const length = Math.abs(hx) + Math.abs(hy) + Math.abs(hz);
     const doubt = length * (this.worst + 8 * ULP * this.reach) + 8 * ULP * Math.abs(offset);
@@ -83,7 +107,7 @@ export class FacePolygon {
     const { corners, ring, size, planes } = this;
     const at = i * CORNER;
     const far = Math.max(Math.abs(corners[at]!), Math.abs(corners[at + 1]!), Math.abs(corners[at + 2]!));
-    const doubt = length * (corners[at + 3]! + 8 * ULP * far) + 8 * ULP * Math.abs(planes.rows[4 * p + 3]!);
+    const doubt = length * (corners[at + 3]! + 8 * ULP * far) + 8 * ULP * Math.abs(planes.rows[PLANE * p + 3]!);
     if (s > doubt) return 1;
     if (s < -doubt) return -1;
     return exactSide(planes, this.face, ring[i]!, ring[i + 1 === size ? 0 : i + 1]!, p);
@@ -108,7 +132,7 @@ export class FacePolygon {
   /** For a plane that coincides with the face: whether it looks the same way. */
   private facesLike(p: number): boolean {
     const { rows } = this.planes;
-    const [f, q] = [4 * this.face, 4 * p];
+    const [f, q] = [PLANE * this.face, PLANE * p];
     return rows[f]! * rows[q]! + rows[f + 1]! * rows[q + 1]! + rows[f + 2]! * rows[q + 2]! > 0;
   }
 
@@ -164,16 +188,21 @@ export class FacePolygon {
     this.worst = worst;
   }
 
-  /** Doubles the room of everything that is as long as the ring. */
   private makeRoom(): void {
-    const wider = <T extends Int8Array | Int32Array | Float64Array>(fresh: T, old: T): T => {
-      fresh.set(old);
-      return fresh;
-    };
-    this.ring = wider(new Int32Array(2 * this.ring.length), this.ring);
-    this.corners = wider(new Float64Array(2 * this.corners.length), this.corners);
-    this.sides = wider(new Int8Array(2 * this.sides.length), this.sides);
-    this.spareRing = new Int32Array(this.ring.length);
-    this.spareCorners = new Float64Array(this.corners.length);
+    const room = this.sides.length + 1;
+    this.ring = withRoom(this.ring, room, integers);
+    this.corners = withRoom(this.corners, room * CORNER, doubles);
+    this.spareRing = withRoom(this.spareRing, room, integers);
+    this.spareCorners = withRoom(this.spareCorners, room * CORNER, doubles);
+    this.sides = withRoom(this.sides, room, signs);
+  }
+
+  private makeMarks(room: number): void {
+    this.turn += 1;
+    if (this.settled.length >= room) return;
+    this.tried = withRoom(this.tried, room, integers);
+    this.settled = withRoom(this.settled, room, integers);
+    this.previous = withRoom(this.previous, room, integers);
+    this.next = withRoom(this.next, room, integers);
   }
 }

@@ -2,99 +2,73 @@ import { FacePolygon } from './clip.ts';
 import type { GroupAction } from './group-action.ts';
 import { CORNER } from './meet.ts';
 import { Nearby } from './nearby.ts';
-import type { SidePlanes } from './side.ts';
-
-/** Finished polygons, one after the other. Slot s has entries `start[s]` … `end[s] − 1`; a face that is not there, none. */
-export class CutFaces {
-  readonly start: Int32Array;
-  readonly end: Int32Array;
-  /** The plane on the other side of each edge. */
-  ring = new Int32Array(64);
-  /** x, y, z and error of the corner at the end of each edge. */
-  corners = new Float64Array(64 * CORNER);
-  /** The slot of each entry. */
-  owner = new Int32Array(64);
-  size = 0;
-  /** The largest coordinate of any corner. */
-  reach = 0;
-  /** Whether some face reaches to infinity. */
-  open = false;
-
-  constructor(slots: number) {
-    this.start = new Int32Array(slots);
-    this.end = new Int32Array(slots);
-  }
-
-  add(slot: number, { ring, corners, size, reach, worst }: FacePolygon): void {
-    if (this.size + size > this.ring.length) this.makeRoom(size);
-    this.start[slot] = this.size;
-    for (let i = 0; i < size; i++) {
-      this.ring[this.size + i] = ring[i]!;
-      this.owner[this.size + i] = slot;
-    }
-    for (let i = 0; i < size * CORNER; i++) this.corners[this.size * CORNER + i] = corners[i]!;
-    // A corner that is not known at all may be anywhere; the other faces tell the size.
-    if (worst < Number.POSITIVE_INFINITY) this.reach = Math.max(this.reach, reach);
-    this.size += size;
-    this.end[slot] = this.size;
-  }
-
-  private makeRoom(size: number): void {
-    const room = 2 * (this.ring.length + size);
-    const [ring, corners, owner] = [new Int32Array(room), new Float64Array(room * CORNER), new Int32Array(room)];
-    ring.set(this.ring);
-    corners.set(this.corners);
-    owner.set(this.owner);
-    Object.assign(this, { ring, corners, owner });
-  }
-}
+import type { PlaneTable } from './plane-table.ts';
+import { bytes, doubles, integers, withRoom } from './room.ts';
 
 /**
- * Cuts the first face of each form that appears.
+ * The first face of each form that appears, cut by all planes. Slot s has the edges `start[s]` … `end[s] − 1`; a face
+ * that does not appear has none.
  *
  * The faces of a convex solid hang together, so it is enough to begin with one that appears and to go on to the
  * neighbours of what is finished: a plane that is never named as a neighbour has no face. A face comes with planes that
  * are known to border it or to lie close by, and after cutting with them there is little left to do.
  */
-export function cutFaces(planes: SidePlanes, count: number, action: GroupAction): CutFaces {
-  return new Walk(planes, count, action).faces;
-}
-
-class Walk {
-  readonly faces: CutFaces;
-  private readonly polygon: FacePolygon;
-  private readonly nearby: Nearby;
+export class CutFaces {
+  start = integers(64);
+  end = integers(64);
+  /** The plane on the other side of each edge. */
+  ring = integers(256);
+  /** x, y, z and error of the corner at the end of each edge. */
+  corners = doubles(256 * CORNER);
+  /** The largest coordinate of any corner. */
+  reach = 0;
+  /** Whether some face reaches to infinity. */
+  open = false;
+  private size = 0;
+  /** The slot of each edge. */
+  private owner = integers(256);
+  /** Edges that name a slot as neighbour: the last of each slot, and the one before each. */
+  private naming = integers(64);
+  private before = integers(256);
   /** Slots to do, in order, and whether each has been put there. */
-  private readonly queue: Int32Array;
-  private readonly queued: Uint8Array;
+  private queue = integers(64);
+  private queued = bytes(64);
   private waiting = 0;
-  /** Finished edges that name a slot: the last of each, and the one before each. */
-  private readonly naming: Int32Array;
-  private before = new Int32Array(64);
+  private readonly nearby = new Nearby();
+  private readonly polygon: FacePolygon;
 
   constructor(
-    planes: SidePlanes,
-    private readonly count: number,
+    private readonly planes: PlaneTable,
     private readonly action: GroupAction,
   ) {
-    const slots = action.first.length;
-    this.faces = new CutFaces(slots);
-    this.polygon = new FacePolygon(planes, count);
-    this.nearby = new Nearby(planes.rows, count);
-    this.queue = new Int32Array(slots);
-    this.queued = new Uint8Array(slots);
-    this.naming = new Int32Array(slots).fill(-1);
-    if (slots > 0) this.walk(slots);
+    this.polygon = new FacePolygon(planes);
   }
 
-  private walk(slots: number): void {
-    this.ask(this.action.slot(this.nearby.nearest()));
+  /** Cuts the faces of the planes that table and action hold now. */
+  cut(): void {
+    const slots = this.action.slots;
+    this.clear(slots);
+    if (slots === 0) return;
+    this.nearby.load(this.planes);
+    this.ask(this.action.slot(this.nearby.nearest(this.planes)));
     for (let done = 0; done < this.waiting; done++) {
       this.finish(this.queue[done]!);
       // Nothing found yet, or an open solid, whose faces need not hang together: no face is left out.
       const last = done + 1 === this.waiting;
-      if (last && (this.faces.open || this.faces.size === 0)) for (let slot = 0; slot < slots; slot++) this.ask(slot);
+      if (last && (this.open || this.size === 0)) for (let slot = 0; slot < slots; slot++) this.ask(slot);
     }
+  }
+
+  private clear(slots: number): void {
+    this.start = withRoom(this.start, slots, integers).fill(0, 0, slots);
+    this.end = withRoom(this.end, slots, integers).fill(0, 0, slots);
+    this.naming = withRoom(this.naming, slots, integers).fill(-1, 0, slots);
+    this.queued = withRoom(this.queued, slots, bytes).fill(0, 0, slots);
+    this.queue = withRoom(this.queue, slots, integers);
+    this.size = 0;
+    this.waiting = 0;
+    this.reach = 0;
+    this.open = false;
   }
 
   private ask(slot: number): void {
@@ -104,23 +78,17 @@ class Walk {
     this.waiting += 1;
   }
 
-  /** Cuts one face, and asks for its neighbours. */
   private finish(slot: number): void {
-    const { polygon, faces, count } = this;
-    polygon.begin(this.action.first[slot]!);
+    const { polygon, action, planes } = this;
+    polygon.begin(action.first[slot]!);
     this.cutWithKnown(slot);
     if (polygon.size > 0) this.nearby.cut(polygon);
     if (polygon.size === 0) return;
-    faces.add(slot, polygon);
-    if (this.before.length < faces.ring.length) {
-      const wider = new Int32Array(faces.ring.length);
-      wider.set(this.before);
-      this.before = wider;
-    }
-    for (let edge = faces.start[slot]!; edge < faces.end[slot]!; edge++) {
-      const neighbour = faces.ring[edge]!;
-      if (neighbour >= count) faces.open = true;
-      else this.name(this.action.slot(neighbour), edge);
+    this.keep(slot);
+    for (let edge = this.start[slot]!; edge < this.end[slot]!; edge++) {
+      const neighbour = this.ring[edge]!;
+      if (neighbour < planes.count) this.name(action.slot(neighbour), edge);
+      else this.open = true;
     }
   }
 
@@ -132,21 +100,46 @@ class Walk {
 
   /** Finished faces that name this one are its neighbours, and so, most often, are the planes beside it in their rings. */
   private cutWithKnown(slot: number): void {
-    const { faces, action } = this;
-    const { ring, owner, start, end } = faces;
+    const { ring, owner, start, end, action } = this;
     for (let edge = this.naming[slot]!; edge !== -1; edge = this.before[edge]!) {
       const face = owner[edge]!;
       const left = ring[edge === start[face] ? end[face]! - 1 : edge - 1]!;
       const right = ring[edge + 1 === end[face] ? start[face]! : edge + 1]!;
-      for (const operation of action.toFirst(ring[edge]!)) {
-        this.cutWith(operation, action.first[face]!);
-        this.cutWith(operation, left);
-        this.cutWith(operation, right);
-      }
+      for (const operation of action.toFirst(ring[edge]!)) this.settle(operation, action.first[face]!, left, right);
     }
   }
 
-  private cutWith(operation: number, plane: number): void {
-    if (plane < this.count && this.polygon.size > 0) this.polygon.cut(this.action.carry(operation, plane));
+  private settle(operation: number, face: number, left: number, right: number): void {
+    const { action, polygon } = this;
+    const back = action.isImproper(operation);
+    polygon.settle(
+      action.carry(operation, face),
+      action.carry(operation, back ? left : right),
+      action.carry(operation, back ? right : left),
+    );
+  }
+
+  private keep(slot: number): void {
+    const { ring, corners, size, reach, worst } = this.polygon;
+    const from = this.size;
+    this.makeRoom(from + size);
+    for (let i = 0; i < size; i++) {
+      this.ring[from + i] = ring[i]!;
+      this.owner[from + i] = slot;
+    }
+    for (let i = 0; i < size * CORNER; i++) this.corners[from * CORNER + i] = corners[i]!;
+    // A corner that is not known at all may be anywhere; the other faces tell the size.
+    if (worst < Number.POSITIVE_INFINITY) this.reach = Math.max(this.reach, reach);
+    this.start[slot] = from;
+    this.end[slot] = from + size;
+    this.size = from + size;
+  }
+
+  private makeRoom(room: number): void {
+    if (this.ring.length >= room) return;
+    this.ring = withRoom(this.ring, room, integers);
+    this.owner = withRoom(this.owner, room, integers);
+    this.before = withRoom(this.before, room, integers);
+    this.corners = withRoom(this.corners, room * CORNER, doubles);
   }
 }

@@ -1,28 +1,33 @@
+import { PLANE } from './plane-table.ts';
 import { ULP } from './side.ts';
 
 /** Numbers kept for a corner: x, y, z and the bound of their error. */
 export const CORNER = 4;
 
-const largest = (x: number, y: number, z: number): number => Math.max(Math.abs(x), Math.abs(y), Math.abs(z));
-
 /**
  * Where three planes meet, as doubles with a bound of their error.
  * Writes x, y, z and the error (of the worst of the three coordinates, ∞ when nothing is known) to `out[at…at+3]`.
- * @param rows h1, h2, h3, D of each plane
+ * @param rows the planes of a `PlaneTable`
  */
 export function meet(rows: Float64Array, a: number, b: number, c: number, out: Float64Array, at: number): void {
-  const ax = rows[4 * a]!;
-  const ay = rows[4 * a + 1]!;
-  const az = rows[4 * a + 2]!;
-  const ad = rows[4 * a + 3]!;
-  const bx = rows[4 * b]!;
-  const by = rows[4 * b + 1]!;
-  const bz = rows[4 * b + 2]!;
-  const bd = rows[4 * b + 3]!;
-  const cx = rows[4 * c]!;
-  const cy = rows[4 * c + 1]!;
-  const cz = rows[4 * c + 2]!;
-  const cd = rows[4 * c + 3]!;
+  const ia = PLANE * a;
+  const ib = PLANE * b;
+  const ic = PLANE * c;
+  const ax = rows[ia]!;
+  const ay = rows[ia + 1]!;
+  const az = rows[ia + 2]!;
+  const ad = rows[ia + 3]!;
+  const na = rows[ia + 4]!;
+  const bx = rows[ib]!;
+  const by = rows[ib + 1]!;
+  const bz = rows[ib + 2]!;
+  const bd = rows[ib + 3]!;
+  const nb = rows[ib + 4]!;
+  const cx = rows[ic]!;
+  const cy = rows[ic + 1]!;
+  const cz = rows[ic + 2]!;
+  const cd = rows[ic + 3]!;
+  const nc = rows[ic + 4]!;
   const bcx = by * cz - bz * cy;
   const bcy = bz * cx - bx * cz;
   const bcz = bx * cy - by * cx;
@@ -33,13 +38,10 @@ export function meet(rows: Float64Array, a: number, b: number, c: number, out: F
   out[at] = x;
   out[at + 1] = y;
   out[at + 2] = z;
-  const na = largest(ax, ay, az);
-  const nb = largest(bx, by, bz);
-  const nc = largest(cx, cy, cz);
   // Each numerator has 6 products of at most |D|·n·n′, det 6 of at most na·nb·nc; each carries at most 7 roundings.
+  const reach = Math.max(Math.abs(x), Math.abs(y), Math.abs(z));
   const numerator = 2 * (Math.abs(ad) * nb * nc + Math.abs(bd) * nc * na + Math.abs(cd) * na * nb);
   const determinant = 6 * na * nb * nc;
   const certain = Math.abs(det) - 8 * ULP * determinant;
-  const error = (8 * ULP * (numerator + largest(x, y, z) * determinant)) / certain;
-  out[at + 3] = certain > 0 ? error : Number.POSITIVE_INFINITY;
+  out[at + 3] = certain > 0 ? (8 * ULP * (numerator + reach * determinant)) / certain : Number.POSITIVE_INFINITY;
 }

@@ -1,5 +1,12 @@
 import type { FacePolygon } from './clip.ts';
 import { CORNER } from './meet.ts';
+import { PLANE, type PlaneTable } from './plane-table.ts';
+import { doubles, integers, withRoom } from './room.ts';
+
+/** Numbers kept for a cell. */
+const CELL = 6;
+const PLANES_A_CELL = 8;
+const DOUBT = 2 ** -44;
 
 /**
  * Which planes could cut a polygon at all, by bounds in doubles that always err towards "could". Index space is taken
@@ -19,61 +26,59 @@ import { CORNER } from './meet.ts';
  */
 export class Nearby {
   /** Unit normal and distance of each plane, sorted by cell. */
-  private readonly unit: Float64Array;
+  private unit = doubles(4 * 64);
   /** Plane at each place of `unit`, and the place of each plane. */
-  private readonly plane: Int32Array;
-  private readonly place: Int32Array;
-  /** Where each cell begins in `unit`. */
-  private readonly start: Int32Array;
-  /** The cell of each plane. */
-  private readonly cellOf: Int32Array;
+  private plane = integers(64);
+  private place = integers(64);
+  /** How many cells there are, where each begins in `unit`, and the cell of each plane. */
+  private count = 0;
+  private start = integers(64);
+  private cellOf = integers(64);
   /** For each cell: mean direction u, |u|², e, smallest δ. */
-  private readonly cells: Float64Array;
-  /** For the polygon at hand: c, |c|, r, and the bound of errors. */
-  private readonly ball = new Float64Array(6);
+  private cells = doubles(64 * CELL);
+  /** For the polygon at hand: how many corners are not settled, their places, c, |c|, r, and the bound of errors. */
+  private loose = 0;
+  private looseCorners = integers(64);
+  private readonly ball = doubles(6);
 
-  /** @param rows h1, h2, h3, D of each plane; those after the first `count` are left out */
-  constructor(rows: Float64Array, count: number) {
+  /** Sorts the planes of a table into cells. */
+  load({ rows, count }: PlaneTable): void {
     const side = Math.max(1, Math.round(Math.sqrt(count / PLANES_A_CELL / 6)));
-    this.cellOf = new Int32Array(count);
-    this.start = new Int32Array(6 * side * side + 1);
+    this.count = 6 * side * side;
+    this.makeRoom(count);
+    const { start, cellOf } = this;
+    start.fill(0, 0, this.count + 1);
     for (let p = 0; p < count; p++) {
-      const cell = cellOfDirection(rows[4 * p]!, rows[4 * p + 1]!, rows[4 * p + 2]!, side);
-      this.cellOf[p] = cell;
-      this.start[cell + 1]! += 1;
+      const cell = cellOfDirection(rows[PLANE * p]!, rows[PLANE * p + 1]!, rows[PLANE * p + 2]!, side);
+      cellOf[p] = cell;
+      start[cell]! += 1;
     }
-    for (let cell = 1; cell < this.start.length; cell++) this.start[cell]! += this.start[cell - 1]!;
-    this.unit = new Float64Array(4 * count);
-    this.plane = new Int32Array(count);
-    this.place = new Int32Array(count);
-    this.sort(rows);
-    this.cells = new Float64Array((this.start.length - 1) * CELL);
-    for (let cell = 0; cell + 1 < this.start.length; cell++) this.measureCell(cell);
+    // Now the end of each cell; putting its planes there from the back leaves its beginning.
+    for (let cell = 1; cell <= this.count; cell++) start[cell]! += start[cell - 1]!;
+    for (let p = count - 1; p >= 0; p--) this.put(p, rows);
+    for (let cell = 0; cell < this.count; cell++) this.measureCell(cell);
   }
 
   /** The plane nearest to the origin; the first of several. */
-  nearest(): number {
-    const { unit, plane } = this;
+  nearest({ count }: PlaneTable): number {
+    const { unit, place } = this;
     let best = 0;
-    for (let i = 1; i < plane.length; i++) {
-      const gap = unit[4 * i + 3]! - unit[4 * best + 3]!;
-      if (gap < 0 || (gap === 0 && plane[i]! < plane[best]!)) best = i;
-    }
-    return plane[best]!;
+    for (let p = 1; p < count; p++) if (unit[4 * place[p]! + 3]! < unit[4 * place[best]! + 3]!) best = p;
+    return best;
   }
 
   /** Cuts a polygon with every plane that may reach it, those of similar direction first. */
   cut(polygon: FacePolygon): void {
-    const { start, cellOf, place, unit } = this;
-    const count = start.length - 1;
+    const { cellOf, place, unit, count } = this;
     const first = cellOf[polygon.face]!;
     const at = 4 * place[polygon.face]!;
     const nx = unit[at]!;
     const ny = unit[at + 1]!;
     const nz = unit[at + 2]!;
-    this.enclose(polygon);
+    if (!this.enclose(polygon)) return;
     for (let k = 0; k < count && polygon.size > 0; k++) {
       const cell = first + k < count ? first + k : first + k - count;
+      if (this.loose === 0) return;
       if (this.cellReaches(cell, nx, ny, nz)) this.cutWithCell(cell, polygon, nx, ny, nz);
     }
   }
@@ -94,8 +99,7 @@ export class Nearby {
       const along = x * nx + y * ny + z * nz;
       if (gap > 0 && gap * gap > square * (1 - along * along + DOUBT)) continue;
       if (!polygon.cut(plane[i]!)) continue;
-      if (polygon.size === 0) return;
-      this.enclose(polygon);
+      if (polygon.size === 0 || !this.enclose(polygon)) return;
       cx = ball[0]!;
       cy = ball[1]!;
       cz = ball[2]!;
@@ -116,21 +120,32 @@ export class Nearby {
     return !(gap > 0 && gap * gap > ball[4]! * ball[4]! * (cells[at + 3]! - along * along + DOUBT));
   }
 
-  /** The mean of the corners, and a radius about it. */
-  private enclose({ corners, size, worst }: FacePolygon): void {
+  /** The mean of the corners that are not settled, and a radius about it. False where all are settled. */
+  private enclose(polygon: FacePolygon): boolean {
+    const { corners, size, worst } = polygon;
+    this.looseCorners = withRoom(this.looseCorners, size, integers);
+    const { looseCorners } = this;
+    let count = 0;
     let cx = 0;
     let cy = 0;
     let cz = 0;
-    for (let at = 0; at < size * CORNER; at += CORNER) {
+    for (let i = 0; i < size; i++) {
+      if (polygon.isSettled(i)) continue;
+      const at = i * CORNER;
+      looseCorners[count] = at;
+      count += 1;
       cx += corners[at]!;
       cy += corners[at + 1]!;
       cz += corners[at + 2]!;
     }
-    cx /= size;
-    cy /= size;
-    cz /= size;
+    this.loose = count;
+    if (count === 0) return false;
+    cx /= count;
+    cy /= count;
+    cz /= count;
     let square = 0;
-    for (let at = 0; at < size * CORNER; at += CORNER) {
+    for (let i = 0; i < count; i++) {
+      const at = looseCorners[i]!;
       const x = corners[at]! - cx;
       const y = corners[at + 1]! - cy;
       const z = corners[at + 2]! - cz;
@@ -143,26 +158,35 @@ export class Nearby {
     ball[3] = Math.sqrt(cx * cx + cy * cy + cz * cz);
     ball[4] = Math.sqrt(square);
     ball[5] = 8 * worst + DOUBT * (ball[3] + ball[4]);
+    return true;
   }
 
-  private sort(rows: Float64Array): void {
+  private put(p: number, rows: Float64Array): void {
     const { start, cellOf, plane, place, unit } = this;
-    const next = start.slice();
-    for (let p = 0; p < place.length; p++) {
-      const i = next[cellOf[p]!]!++;
-      plane[i] = p;
-      place[p] = i;
-      const x = rows[4 * p]!;
-      const y = rows[4 * p + 1]!;
-      const z = rows[4 * p + 2]!;
-      const length = Math.sqrt(x * x + y * y + z * z);
-      unit[4 * i] = x / length;
-      unit[4 * i + 1] = y / length;
-      unit[4 * i + 2] = z / length;
-      // Shortened by more than its rounding.
-      const distance = rows[4 * p + 3]! / length;
-      unit[4 * i + 3] = distance - DOUBT * Math.abs(distance);
-    }
+    const cell = cellOf[p]!;
+    const i = start[cell]! - 1;
+    start[cell] = i;
+    plane[i] = p;
+    place[p] = i;
+    const x = rows[PLANE * p]!;
+    const y = rows[PLANE * p + 1]!;
+    const z = rows[PLANE * p + 2]!;
+    const length = Math.sqrt(x * x + y * y + z * z);
+    const distance = rows[PLANE * p + 3]! / length;
+    unit[4 * i] = x / length;
+    unit[4 * i + 1] = y / length;
+    unit[4 * i + 2] = z / length;
+    // Shortened by more than its rounding.
+    unit[4 * i + 3] = distance - DOUBT * Math.abs(distance);
+  }
+
+  private makeRoom(count: number): void {
+    this.unit = withRoom(this.unit, 4 * count, doubles);
+    this.plane = withRoom(this.plane, count, integers);
+    this.place = withRoom(this.place, count, integers);
+    this.cellOf = withRoom(this.cellOf, count, integers);
+    this.start = withRoom(this.start, this.count + 1, integers);
+    this.cells = withRoom(this.cells, this.count * CELL, doubles);
   }
 
   private measureCell(cell: number): void {
@@ -200,11 +224,6 @@ export class Nearby {
     cells[at + 5] = nearest;
   }
 }
-
-/** Numbers kept for a cell. */
-const CELL = 6;
-const PLANES_A_CELL = 8;
-const DOUBT = 2 ** -44;
 
 /** Cells are squares on the sides of a cube around the origin, `side` along each edge. */
 function cellOfDirection(x: number, y: number, z: number, side: number): number {

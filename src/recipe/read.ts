@@ -4,7 +4,7 @@ import { presetRecipe, type Shelf } from './shelf.ts';
 import { readText } from './text.ts';
 
 /** A preset's name: words of letters, digits, - and _, with at most one /. Anything else in a text is a recipe. */
-const PRESET_NAME = /^\s*\w[\w.-]*(\/\w[\w.-]*)?\s*$/;
+const PRESET_NAME = /^\s*\w[\w.-]*(\/[\w.-]+)?\s*$/;
 
 /**
  * Reads a recipe in any of the ways the library takes it: the name of a preset, YAML or JSON text, or the parsed object.

@@ -2,7 +2,9 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { meet } from '../../src/polyhedron/meet.ts';
 import { commensurateOffsets, exactOffsets, type Offset } from '../../src/polyhedron/offset.ts';
-import { exactSide, sidePlanes } from '../../src/polyhedron/side.ts';
+import { PlaneTable } from '../../src/polyhedron/plane-table.ts';
+import { loosePlanes } from '../../src/polyhedron/planes.ts';
+import { exactSide } from '../../src/polyhedron/side.ts';
 import { nextDown, nextUp } from './hand-planes.ts';
 import { cornerOf, rowOf, sideOf } from './rational.ts';
 
@@ -16,10 +18,13 @@ function slowSide(normals: readonly Normal[], offsets: readonly Offset[]): -1 | 
   return corner && sideOf(p!, corner);
 }
 
+const tableOf = (normals: readonly Normal[], offsets: readonly Offset[]): PlaneTable =>
+  new PlaneTable().load(loosePlanes(Float64Array.from(normals.flat()), offsets));
+
 function compare(normals: readonly Normal[], offsets: readonly Offset[]): void {
   const wanted = slowSide(normals, offsets);
   if (wanted === null) return;
-  expect(exactSide(sidePlanes(normals.flat(), offsets), 0, 1, 2, 3)).toBe(wanted);
+  expect(exactSide(tableOf(normals, offsets), 0, 1, 2, 3)).toBe(wanted);
 }
 
 const entry = (largest: number) => fc.integer({ min: -largest, max: largest });
@@ -72,7 +77,7 @@ describe('the meeting of three planes', () => {
         const exact = cornerOf(rowOf(h[0]!, three[0]!), rowOf(h[1]!, three[1]!), rowOf(h[2]!, three[2]!));
         if (!exact) return;
         const out = new Float64Array(4);
-        meet(sidePlanes(h.slice(0, 3).flat(), three).rows, 0, 1, 2, out, 0);
+        meet(tableOf(h.slice(0, 3), three).rows, 0, 1, 2, out, 0);
         for (let axis = 0; axis < 3; axis++) {
           if (!Number.isFinite(out[3]!)) continue;
           const scale = 1n << 120n;

@@ -1,0 +1,76 @@
+import fc from 'fast-check';
+import { PRESET_FOLDER } from '../../src/disk/preset-folder.ts';
+import { type AxisLine, axisLines } from '../../src/habit/axis-ends.ts';
+import { type ClosedHabit, isClosed, polyhedron } from '../../src/habit/habit.ts';
+import { read } from '../../src/recipe/read.ts';
+
+export function habitOf(recipe: unknown): ClosedHabit {
+  const habit = polyhedron(read(recipe, PRESET_FOLDER).crystal);
+  if (!isClosed(habit)) throw new Error('the crystal is open');
+  return habit;
+}
+
+const cubic = (pointGroup: string, ...forms: [face: string, distance: number][]): ClosedHabit =>
+  habitOf({ pointGroup, cell: { a: 5 }, forms: forms.map(([face, distance]) => ({ face, distance })) });
+
+/** Edge 2. */
+export const cube = cubic('m-3m', ['100', 1]);
+export const octahedron = cubic('m-3m', ['111', 1]);
+export const cuboctahedron = cubic('m-3m', ['100', 1], ['111', 2 / Math.sqrt(3)]);
+export const tetrahedron = cubic('-43m', ['111', 1]);
+export const hexaoctahedron = cubic('m-3m', ['123', 1]);
+export const scalenohedron = habitOf({
+  title: 'Calcite <dogtooth> & "spar"',
+  pointGroup: '-3m1',
+  cell: { a: 4.99, c: 17.06 },
+  forms: [{ face: '21-34', distance: 1 }],
+});
+export const monoclinic = habitOf({
+  pointGroup: '2/m',
+  cell: { a: 5.68, b: 15.18, c: 6.52, beta: 118.4 },
+  forms: [
+    { face: '010', distance: 0.6 },
+    { face: '120', distance: 1 },
+    { face: '111', distance: 1.6 },
+  ],
+});
+export const triclinic = habitOf({
+  pointGroup: '-1',
+  cell: { a: 7, b: 9, c: 6, alpha: 95, beta: 105, gamma: 88 },
+  forms: ['100', '010', '001', '1-10', '111', '-111', '101'].map((face, i) => ({ face, distance: 1 + 0.06 * i })),
+});
+/** Point group 321: polar two-fold axes; letters m, r and z. */
+export const quartz = habitOf({
+  mineral: 'quartz',
+  forms: [
+    { face: 'm', distance: 1 },
+    { face: 'r', distance: 1.62 },
+    { face: 'z', distance: 1.78 },
+  ],
+});
+
+export const CRYSTALS: readonly (readonly [name: string, habit: ClosedHabit])[] = [
+  ['cube', cube],
+  ['octahedron', octahedron],
+  ['cuboctahedron', cuboctahedron],
+  ['tetrahedron', tetrahedron],
+  ['hexaoctahedron', hexaoctahedron],
+  ['scalenohedron', scalenohedron],
+  ['monoclinic', monoclinic],
+  ['triclinic', triclinic],
+  ['quartz', quartz],
+];
+
+export const allAxes = ({ crystal }: ClosedHabit): AxisLine[] => axisLines(crystal, { orders: null, directions: null });
+
+export const anyCrystal = fc.constantFrom(...CRYSTALS.map(([, habit]) => habit));
+/** Anywhere on the sphere; fast-check alone would mostly choose angles next to 0, 90 and 180. */
+const spread = fc.record({ turn: fc.nat(359_999), tilt: fc.nat(179_999) }).map(({ turn, tilt }) => ({
+  turn: ((turn * 7919) % 360_000) / 1000 - 180,
+  tilt: ((tilt * 7907) % 180_000) / 1000 - 90,
+}));
+const special = fc.record({
+  turn: fc.double({ min: -180, max: 180, noNaN: true }),
+  tilt: fc.double({ min: -90, max: 90, noNaN: true }),
+});
+export const anyView = fc.oneof({ arbitrary: spread, weight: 3 }, { arbitrary: special, weight: 1 });
