@@ -31,7 +31,7 @@ export function inspect(recipe: RecipeInput | string): Inspection {
   return inspection(read, polyhedron(read.crystal));
 }
 
-/** Makes the files for printing, in memory. @throws RecipeError, PrintError */
+/** Makes the files for printing, in memory. @throws RecipeError, ObjectError */
 export const make = (recipe: RecipeInput | string): Promise<Made> => makeModel(resolved(recipe));
 
 /** Face indices as a list of three, or four on hexagonal axes, or as text such as "10-11". */

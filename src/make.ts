@@ -1,16 +1,16 @@
-import { checkMesh } from './files/mesh-check.ts';
-import type { MeshReport } from './files/mesh-report.ts';
-import { readStl } from './files/stl-read.ts';
-import { writeStl } from './files/stl-write.ts';
-import { writeStlText } from './files/stl-write-text.ts';
-import { weldFloat32 } from './files/weld.ts';
-import { closingAdvice, openMessage } from './habit/closing.ts';
-import { type ClosedHabit, isClosed, polyhedron } from './habit/habit.ts';
+import { checkMesh } from './files/mesh/check.ts';
+import type { MeshReport } from './files/mesh/report.ts';
+import { weldFloat32 } from './files/mesh/weld.ts';
+import { readStl } from './files/stl/read.ts';
+import { writeStl } from './files/stl/write.ts';
+import { writeStlText } from './files/stl/write-text.ts';
+import { closedOrThrow } from './habit/closing.ts';
+import { type ClosedHabit, polyhedron } from './habit/habit.ts';
+import { ObjectError } from './habit/object-error.ts';
 import { millimetresPerUnit } from './habit/scale.ts';
 import type { Mesh } from './print/mesh.ts';
 import { assemble, ontoBed, type Part } from './print/part.ts';
 import { printedParts } from './print/parts.ts';
-import { PrintError } from './print/print-error.ts';
 import type { Resolved } from './recipe/crystal.ts';
 import { USUAL_SIZE } from './recipe/print-plan.ts';
 
@@ -39,11 +39,10 @@ const VOLUME_TOLERANCE = 1e-5;
 /**
  * From a resolved recipe to printable files in memory: solves the polyhedron, builds the parts, writes each file, reads
  * it back and checks it.
- * @throws PrintError when the crystal is open, cannot carry what is asked, or a file fails its own check
+ * @throws ObjectError when the crystal is open, cannot carry what is asked, or a file fails its own check
  */
 export async function makeModel(resolved: Resolved): Promise<Made> {
-  const habit = polyhedron(resolved.crystal);
-  if (!isClosed(habit)) throw new PrintError('open', openMessage(habit), closingAdvice(habit));
+  const habit = closedOrThrow(polyhedron(resolved.crystal));
   const { print, crystal } = resolved;
   const scale = millimetresPerUnit(habit, print.size ?? USUAL_SIZE);
   const { parts, remarks } = await printedParts(habit, scale, print);
@@ -76,15 +75,15 @@ function assertVolume({ name, check }: MadeFile, exact: number): void {
   if (off > VOLUME_TOLERANCE) throw notSound(name, `Its volume differs from the crystal's by ${off.toExponential(1)}.`);
 }
 
-const notSound = (name: string, why: string): PrintError =>
-  new PrintError(
+const notSound = (name: string, why: string): ObjectError =>
+  new ObjectError(
     'not-sound',
     `${name} failed its own check and is not written: ${why}`,
     'try a slightly different size or rod diameter, and please report the recipe',
   );
 
 /** File name without ending: what the recipe asks for, else the mineral and habit, else the title. */
-function fileStem({ crystal, print }: Resolved): string {
+export function fileStem({ crystal, print }: Resolved): string {
   return print.file ?? slug(crystal.mineral ? crystal.mineral.id + habitSuffix(crystal.mineral) : crystal.title);
 }
 
@@ -92,7 +91,7 @@ const habitSuffix = ({ habit, firstHabit }: { habit: string; firstHabit: string 
   habit === firstHabit ? '' : `-${habit}`;
 
 /** Lower-case letters, digits and hyphens: safe as a file name everywhere. */
-export function slug(title: string): string {
+function slug(title: string): string {
   const plain = title.normalize('NFKD').replace(/\p{M}/gu, '').toLowerCase();
   return (
     plain

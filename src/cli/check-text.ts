@@ -1,4 +1,4 @@
-import type { MeshReport } from '../files/mesh-report.ts';
+import type { MeshReport } from '../files/mesh/report.ts';
 
 /** What was found in a file, in words. */
 export function checkText(path: string, format: string, found: MeshReport): string {

@@ -14,8 +14,8 @@ export function checkCommand(): Command {
     .action(async (paths: string[], flags: { json?: true }) => {
       const [{ readInput }, { readStl }, { checkMesh }, { checkText }] = await Promise.all([
         import('../disk/read-input.ts'),
-        import('../files/stl-read.ts'),
-        import('../files/mesh-check.ts'),
+        import('../files/stl/read.ts'),
+        import('../files/mesh/check.ts'),
         import('./check-text.ts'),
       ]);
       const reports: unknown[] = [];

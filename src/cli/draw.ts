@@ -1,5 +1,65 @@
 import { Command } from 'commander';
+import { remark, result } from './say.ts';
+
+interface DrawFlags {
+  out?: string;
+  view: string;
+  lines?: true;
+  hidden: string;
+  labels: string;
+  axes?: string | true;
+  size?: string;
+  height?: true;
+  bare?: true;
+  sheet?: true;
+  columns?: string;
+}
 
 export function drawCommand(): Command {
-  return new Command('draw').description('Draw a crystal as SVG.');
+  return new Command('draw')
+    .description('Draw crystals as SVG, singly or together on a contact sheet.')
+    .argument('<recipe...>', 'presets, YAML files or -; with --sheet also "all", or the name of a set')
+    .option('-o, --out <file>', 'where the drawing goes; - for standard output')
+    .option(
+      '-v, --view <view>',
+      'general; c or "[111]" along an axis; "(111)" onto a face; "30 20" turn and tilt',
+      'general',
+    )
+    .option('--labels <what>', 'letters or indices on the faces', 'none')
+    .option('--lines', 'lines only, no tints')
+    .option('--hidden <how>', 'hidden edges thin, or none', 'thin')
+    .option('-a, --axes [which]', 'symmetry axes as rods, chosen as for make')
+    .option('-s, --size <size>', 'size of the object, as for make; brings a scale bar')
+    .option('--height', 'state the height of the object')
+    .option('--bare', 'without title, legend and scale bar')
+    .option('--sheet', 'all on one contact sheet')
+    .option('--columns <number>', 'of the contact sheet')
+    .addHelpText(
+      'after',
+      '\nExamples:\n  goniolith draw quartz --axes --labels letters\n  goniolith draw calcite --view c --lines --out calcite.svg\n  goniolith draw all --sheet',
+    )
+    .action(draw);
+}
+
+async function draw(recipes: string[], flags: DrawFlags): Promise<void> {
+  const [{ drawing }, { sheet }, { writeFiles }, path] = await Promise.all([
+    import('./draw-one.ts'),
+    import('./draw-sheet.ts'),
+    import('../disk/write-files.ts'),
+    import('node:path'),
+  ]);
+  const pictures = flags.sheet
+    ? [await sheet(recipes, flags)]
+    : await Promise.all(recipes.map((recipe) => drawing(recipe, flags)));
+  if (flags.out === '-') return result(pictures.map(({ svg }) => svg).join('\n'));
+  if (flags.out !== undefined && pictures.length > 1) {
+    const { UsageError } = await import('./failure.ts');
+    throw new UsageError('--out takes one drawing; draw several with --sheet, or without --out.');
+  }
+  for (const { name, svg } of pictures) {
+    const file = flags.out ?? path.join('out', `${name}.svg`);
+    await writeFiles(path.dirname(file), [{ name: path.basename(file), bytes: new TextEncoder().encode(svg) }]);
+    result(file);
+  }
+  return remark(`  ${pictures.length === 1 ? 'One drawing' : `${pictures.length} drawings`}, orthographic.`);
 }

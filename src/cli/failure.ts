@@ -4,7 +4,7 @@ export const EXIT = { done: 0, atFault: 1, wrongUse: 2 } as const;
 /** Errors whose message is meant for the person; everything else is a fault of the program. */
 const FOR_PEOPLE = new Set([
   'RecipeError',
-  'PrintError',
+  'ObjectError',
   'CrystalError',
   'QuantityError',
   'FileError',

@@ -6,7 +6,7 @@ import { type Figure, type FigureOptions, figure, type LineWeights } from './fig
 import { legend } from './legend.ts';
 import { FAINT, PAPER } from './palette.ts';
 import { extentOf, fitInto, type Placement, place, project } from './project.ts';
-import { type AxisRods, type LaidRods, layRods } from './rod-layout.ts';
+import type { DrawnRods } from './rods.ts';
 import { heightLine, scaleBar } from './scale-bar.ts';
 import { svgPage } from './svg.ts';
 import { layOutSymbol, symbolText, words } from './symbol-text.ts';
@@ -21,8 +21,8 @@ export interface DrawOptions {
   readonly hidden?: 'thin' | 'none';
   /** On every face that has room: `none` by default. */
   readonly labels?: 'none' | 'letters' | 'indices';
-  /** Symmetry axes as rods, or rods already laid out for printing. Without a size, a crystal 70 mm long is assumed. */
-  readonly axes?: AxisRods | LaidRods;
+  /** Symmetry axes as rods, laid out for this size; without a size, for a crystal 70 mm long. */
+  readonly axes?: DrawnRods;
   /** The object's size; brings a scale bar. */
   readonly millimetresPerUnit?: number;
   /** True by default where there is a size. */
@@ -102,8 +102,7 @@ function check({ height, millimetresPerUnit }: DrawOptions, width: number): void
 function figureOptions(habit: ClosedHabit, options: DrawOptions): FigureOptions {
   const { view = 'general', style = 'tinted', hidden = 'thin', labels = 'none', axes } = options;
   const millimetresPerUnit = options.millimetresPerUnit ?? unitFor(habit, USUAL_SIZE);
-  const laid = axes && ('ends' in axes ? axes : layRods(habit, axes, millimetresPerUnit));
-  return { view, style, hidden, labels, weights: WEIGHTS, rods: laid ? { laid, millimetresPerUnit } : null };
+  return { view, style, hidden, labels, weights: WEIGHTS, rods: axes ? { laid: axes, millimetresPerUnit } : null };
 }
 
 /** The name, and under it the point group with overbars and what is known besides. */

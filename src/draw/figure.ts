@@ -1,10 +1,10 @@
+import { facePlanes } from '../habit/face-planes.ts';
 import type { ClosedHabit } from '../habit/habit.ts';
 import { faceCorners } from '../polyhedron/measures.ts';
 import { faceLabels, type LabelKind, labelText } from './labels.ts';
 import { INK, PAPER, shaded, tintOf } from './palette.ts';
 import { type Bounds, boundsOf, hull, type Placement, place, projectAll } from './project.ts';
-import { facePlanes, type LaidRods } from './rod-layout.ts';
-import { type RodPiece, rodPieces } from './rods.ts';
+import { type DrawnRods, type RodPiece, rodPieces } from './rods.ts';
 import { closedPath, element, linePath, openPath } from './svg.ts';
 import { dot, type Point, unit, type Vector, vectorAt } from './vector.ts';
 import { type View, type ViewFrame, viewFrame } from './view.ts';
@@ -25,7 +25,7 @@ export interface FigureOptions {
   readonly hidden: 'thin' | 'none';
   readonly labels: LabelKind | 'none';
   readonly weights: LineWeights;
-  readonly rods: { readonly laid: LaidRods; readonly millimetresPerUnit: number } | null;
+  readonly rods: { readonly laid: DrawnRods; readonly millimetresPerUnit: number } | null;
 }
 
 /** A crystal seen from a direction, ready to be put on a page. */

@@ -1,6 +1,7 @@
 import { AXIS_SYMBOLS, type Outline } from '../habit/axis-symbol.ts';
+import { exitOf, type FacePlane } from '../habit/face-planes.ts';
+import type { RodEnd, RodPlan } from '../habit/rod-plan.ts';
 import { hull, project } from './project.ts';
-import { exitOf, type FacePlane, type LaidEnd, type LaidRods } from './rod-layout.ts';
 import { along, cross, dot, type Point, type Vector } from './vector.ts';
 import type { ViewFrame } from './view.ts';
 import { EDGE_ON, stateOf } from './visible.ts';
@@ -18,6 +19,11 @@ export interface RodPiece {
   readonly rims: readonly (readonly Point[])[];
 }
 
+/** Laid out as for printing (a `RodPlan` is one), or only some of the ends. */
+export interface DrawnRods extends Pick<RodPlan, 'diameter' | 'symbolUnit'> {
+  readonly ends: readonly (readonly RodEnd[])[];
+}
+
 /**
  * The pieces of all rods in painting order. Why painting in order is exact here:
  * - Against the body. A point that stands out of the crystal lies outside the plane of some face, and the whole crystal
@@ -28,7 +34,7 @@ export interface RodPiece {
  *   is seen at the distance s from the centre, so of two rods seen in one place the one with the smaller angle is nearer.
  */
 export function rodPieces(
-  { ends, diameter, symbolUnit }: LaidRods,
+  { ends, diameter, symbolUnit }: DrawnRods,
   planes: readonly FacePlane[],
   frame: ViewFrame,
 ): RodPiece[] {
@@ -51,7 +57,7 @@ const STRIPS = 32;
  * the plane of a face that does not turn away, it belongs before the body; a rod that leaves through an edge or a corner
  * may have lines that start behind.
  */
-function shaftPieces(laid: LaidEnd, radius: number, planes: readonly FacePlane[], frame: ViewFrame): RodPiece[] {
+function shaftPieces(laid: RodEnd, radius: number, planes: readonly FacePlane[], frame: ViewFrame): RodPiece[] {
   const axis = laid.end.along;
   const across = cross(axis, frame.toward);
   const sine = Math.hypot(...across);
@@ -97,7 +103,7 @@ function seenFeet(lines: readonly { foot: Point; seen: boolean }[]): Point[][] {
 }
 
 /** The terminal: a plate with the outline of its symbol across the axis. Its face shows from the outer side only. */
-function platePieces(laid: LaidEnd, symbolUnit: number, planes: readonly FacePlane[], frame: ViewFrame): RodPiece[] {
+function platePieces(laid: RodEnd, symbolUnit: number, planes: readonly FacePlane[], frame: ViewFrame): RodPiece[] {
   const { end, line, base, tip } = laid;
   const { outline, hollow, island } = AXIS_SYMBOLS[line.symbol];
   const spread = cross(end.along, end.across);

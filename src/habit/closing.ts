@@ -2,7 +2,8 @@ import { form } from '../crystal/form.ts';
 import { printFace, printZone } from '../crystal/indices.ts';
 import { type Miller, miller } from '../crystal/spaces.ts';
 import { openDirections } from '../polyhedron/open.ts';
-import type { Habit } from './habit.ts';
+import { type ClosedHabit, type Habit, isClosed } from './habit.ts';
+import { ObjectError } from './object-error.ts';
 
 const CANDIDATES: readonly Miller[] = [
   [0, 0, 1],
@@ -14,8 +15,14 @@ const CANDIDATES: readonly Miller[] = [
   [1, 1, 1],
 ].map(([h, k, l]) => miller(h!, k!, l!));
 
+/** The habit, if its faces close. @throws ObjectError `open`, with forms that would close it */
+export function closedOrThrow(habit: Habit): ClosedHabit {
+  if (isClosed(habit)) return habit;
+  throw new ObjectError('open', openMessage(habit), closingAdvice(habit));
+}
+
 /** Along which directions a crystal is open, in words. */
-export const openMessage = ({ openAlong }: Habit): string =>
+const openMessage = ({ openAlong }: Habit): string =>
   `these forms do not close: the crystal stays open along ${openAlong.map((ray) => printZone(ray)).join(', ')}`;
 
 /** Names simple forms that would close an open crystal, as lines for its recipe. */

@@ -1,6 +1,6 @@
 import type { Manifold } from 'manifold-3d';
+import type { RodEnd, RodPlan } from '../habit/rod-plan.ts';
 import type { Workbench } from './kit.ts';
-import type { RodEnd, RodPlan } from './rod-plan.ts';
 import { rodOutline, terminal, toEnd } from './rod-solid.ts';
 
 /**

@@ -1,11 +1,10 @@
-import { axisLines } from '../habit/axis-ends.ts';
 import type { ClosedHabit } from '../habit/habit.ts';
+import { planRods } from '../habit/rod-plan.ts';
 import type { PrintPlan } from '../recipe/crystal.ts';
 import { crystalMesh } from './body.ts';
 import { fuseRods } from './fused-rods.ts';
 import { withSolids } from './kit.ts';
 import { ontoBed, type Part } from './part.ts';
-import { planRods } from './rod-plan.ts';
 import { boreForRods } from './separate-rods.ts';
 
 export interface PrintedModel {
@@ -14,7 +13,7 @@ export interface PrintedModel {
   readonly remarks: readonly string[];
 }
 
-/** Makes the printable parts of a crystal at its size. @throws PrintError */
+/** Makes the printable parts of a crystal at its size. @throws ObjectError */
 export async function printedParts(
   habit: ClosedHabit,
   scale: number,
@@ -22,12 +21,8 @@ export async function printedParts(
 ): Promise<PrintedModel> {
   const crystal = crystalMesh(habit, scale);
   if (!axes) return { parts: [bodyPart('the crystal', crystal)], remarks: [] };
-  if (!axes.orders && !axes.directions && axisLines(habit.crystal, axes).length === 0)
-    return {
-      parts: [bodyPart('the crystal', crystal)],
-      remarks: [`Point group ${habit.crystal.group.hermannMauguin} has no symmetry axes, so there are no rods.`],
-    };
   const plan = planRods(habit, scale, axes);
+  if (plan.ends.length === 0) return { parts: [bodyPart('the crystal', crystal)], remarks: plan.remarks };
   const thin =
     axes.diameter < printer.rod.smallest
       ? [

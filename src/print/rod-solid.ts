@@ -1,8 +1,8 @@
 import type { Manifold, Mat4 } from 'manifold-3d';
 import type { AxisEnd } from '../habit/axis-ends.ts';
 import { AXIS_SYMBOLS, type Outline, type RodSymbol } from '../habit/axis-symbol.ts';
+import type { RodPlan } from '../habit/rod-plan.ts';
 import type { Workbench } from './kit.ts';
-import type { RodPlan } from './rod-plan.ts';
 
 /** A rod's flat sides may lie this far inside its circle, millimetres. */
 const CHORD_ERROR = 0.02;

@@ -2,10 +2,10 @@ import type { Manifold, Mat4 } from 'manifold-3d';
 import { printZone } from '../crystal/indices.ts';
 import type { AxisEnd } from '../habit/axis-ends.ts';
 import { orderOf } from '../habit/axis-symbol.ts';
+import { ObjectError } from '../habit/object-error.ts';
+import { COLLAR, GAP, type RodEnd, type RodPlan } from '../habit/rod-plan.ts';
 import type { Workbench } from './kit.ts';
 import { ontoBed, type Part } from './part.ts';
-import { PrintError } from './print-error.ts';
-import { COLLAR, GAP, type RodEnd, type RodPlan } from './rod-plan.ts';
 import { boreOutline, HOLLOW_DEPTH, rodOutline, terminal, toEnd } from './rod-solid.ts';
 
 /** Plastic left between two bores that meet near the centre, millimetres. */
@@ -21,7 +21,7 @@ export interface Bored {
 /**
  * Bores the body for rods that are printed by themselves. Only one rod can pass the centre: the first line's, which is
  * of the highest order; its far symbol is a cap. Rods of all other lines are split and end short of the centre.
- * @throws PrintError when the bores would leave too little to hold a rod
+ * @throws ObjectError when the bores would leave too little to hold a rod
  */
 export function boreForRods(bench: Workbench, body: Manifold, plan: RodPlan, clearance: number): Bored {
   const [through, ...split] = plan.ends;
@@ -44,7 +44,7 @@ function blindDepth(end: RodEnd, plan: RodPlan, clearance: number): number {
   const others = plan.ends.flat().filter(({ line }) => line !== end.line);
   const depth = Math.max(...others.map((other) => half / Math.tan(angle(end.end, other.end) / 2)));
   if (end.exit - depth >= 2 * plan.diameter) return depth;
-  throw new PrintError(
+  throw new ObjectError(
     'rods-crowded',
     `separate rods leave too little to hold the one along ${printZone(end.line.direction)}: ${Math.max(0, end.exit - depth).toFixed(1)} mm of bore`,
     'choose fewer axes or thinner rods, a larger crystal, or fused rods',

@@ -4,7 +4,6 @@ import { miller, zone } from '../../src/crystal/spaces.ts';
 import { type DrawOptions, drawCrystal } from '../../src/draw/crystal.ts';
 import type { ClosedHabit } from '../../src/habit/habit.ts';
 import {
-  allAxes,
   anyCrystal,
   anyView,
   CRYSTALS,
@@ -14,6 +13,7 @@ import {
   monoclinic,
   octahedron,
   quartz,
+  rodsOf,
   scalenohedron,
   tetrahedron,
 } from './crystals.ts';
@@ -21,12 +21,11 @@ import { pathPoints, readXml, type XmlElement } from './xml.ts';
 
 const BARE: DrawOptions = { title: false, legend: false, scaleBar: false };
 
-const everything = (habit: ClosedHabit): DrawOptions => ({
-  axes: { lines: allAxes(habit), reach: 12, diameter: 3 },
-  labels: 'letters',
-  millimetresPerUnit: 70 / habit.measures.circumscribedRadius / 2,
-  height: true,
-});
+function everything(habit: ClosedHabit): DrawOptions {
+  const millimetresPerUnit = 70 / habit.measures.circumscribedRadius / 2;
+  const axes = rodsOf(habit, millimetresPerUnit, { reach: 12, diameter: 3 });
+  return { axes, labels: 'letters', millimetresPerUnit, height: true };
+}
 
 const paths = (svg: string): XmlElement[] => readXml(svg).filter(({ name }) => name === 'path');
 
@@ -176,8 +175,8 @@ describe('sizes', () => {
       const xs = (all: [number, number][]) => Math.max(...all.map(([x]) => x)) - Math.min(...all.map(([x]) => x));
       return xs(points) / xs(pathPoints(body.attributes.d!));
     };
-    const lines = allAxes(cube).filter(({ symbol }) => symbol === '4/m');
-    const svg = drawCrystal(cube, { ...BARE, view, axes: { lines, reach: 12, diameter: 3 }, millimetresPerUnit: 20 });
+    const axes = rodsOf(cube, 20, { reach: 12, diameter: 3, orders: [4] });
+    const svg = drawCrystal(cube, { ...BARE, view, axes, millimetresPerUnit: 20 });
     expect(span(svg)).toBeCloseTo((40 + 24) / 40, 3);
   });
 });

@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { PRESET_FOLDER } from '../../src/disk/preset-folder.ts';
-import { type AxisLine, axisLines } from '../../src/habit/axis-ends.ts';
 import { type ClosedHabit, isClosed, polyhedron } from '../../src/habit/habit.ts';
+import { planRods, type RodPlan } from '../../src/habit/rod-plan.ts';
+import { mm } from '../../src/recipe/quantity.ts';
 import { read } from '../../src/recipe/read.ts';
 
 export function habitOf(recipe: unknown): ClosedHabit {
@@ -61,7 +62,19 @@ export const CRYSTALS: readonly (readonly [name: string, habit: ClosedHabit])[] 
   ['quartz', quartz],
 ];
 
-export const allAxes = ({ crystal }: ClosedHabit): AxisLine[] => axisLines(crystal, { orders: null, directions: null });
+/** All axes of a crystal as rods, or those of some orders. Lengths in millimetres. */
+export const rodsOf = (
+  habit: ClosedHabit,
+  millimetresPerUnit: number,
+  { diameter, reach, orders = null }: { diameter: number; reach: number; orders?: number[] | null },
+): RodPlan =>
+  planRods(habit, millimetresPerUnit, {
+    orders,
+    directions: null,
+    fit: 'fused',
+    diameter: mm(diameter),
+    reach: mm(reach),
+  });
 
 export const anyCrystal = fc.constantFrom(...CRYSTALS.map(([, habit]) => habit));
 /** Anywhere on the sphere; fast-check alone would mostly choose angles next to 0, 90 and 180. */

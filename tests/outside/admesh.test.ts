@@ -3,8 +3,8 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
-import { writeStl, writeStlText } from '../../src/files/stl-write.ts';
-import { weldFloat32 } from '../../src/files/weld.ts';
+import { weldFloat32 } from '../../src/files/mesh/weld.ts';
+import { writeStl, writeStlText } from '../../src/files/stl/write.ts';
 import type { Mesh } from '../../src/print/mesh.ts';
 import { cube, octahedron, together, torus, turned, unwelded } from '../files/shapes.ts';
 

@@ -1,0 +1,48 @@
+import { PRESET_FOLDER } from '../disk/preset-folder.ts';
+import { contactSheet, type SheetEntry } from '../draw/contact-sheet.ts';
+import { closedOrThrow } from '../habit/closing.ts';
+import { polyhedron } from '../habit/habit.ts';
+import { preset } from '../recipe/shelf.ts';
+import { type LookFlags, lookFrom, viewFrom } from './draw-options.ts';
+import { UsageError } from './failure.ts';
+import { recipeFrom } from './recipe-input.ts';
+
+/** Many crystals on one sheet: recipes one by one, every habit of all minerals ("all"), or a whole set. */
+export async function sheet(
+  words: readonly string[],
+  flags: LookFlags & { columns?: string },
+): Promise<{ name: string; svg: string }> {
+  const { style, hidden } = lookFrom(flags);
+  const columns = flags.columns === undefined ? undefined : Number(flags.columns);
+  if (columns !== undefined && !(Number.isInteger(columns) && columns > 0))
+    throw new UsageError(`--columns is a whole number from 1, not "${flags.columns}".`);
+  const recipes = words.flatMap(recipesOf);
+  const entries = await Promise.all(recipes.map((recipe) => entry(recipe)));
+  const first = await recipeFrom(recipes[0]!);
+  const svg = contactSheet(entries, {
+    ...(style && { style }),
+    ...(hidden && { hidden: flags.hidden === 'thin' && entries.length > 12 ? 'none' : hidden }),
+    ...(columns !== undefined && { columns }),
+    view: viewFrom(flags.view, first.crystal),
+  });
+  return {
+    name: words.length === 1 && words[0] !== undefined ? `sheet-${words[0].replaceAll('/', '-')}` : 'sheet',
+    svg,
+  };
+}
+
+function recipesOf(word: string): string[] {
+  if (word === 'all')
+    return PRESET_FOLDER.list('minerals').flatMap((name) =>
+      Object.keys(preset(PRESET_FOLDER, 'minerals', name)!.habits).map((habit) => `${name}/${habit}`),
+    );
+  const set = preset(PRESET_FOLDER, 'sets', word);
+  return set ? Object.keys(set.recipes).map((key) => `${word}/${key}`) : [word];
+}
+
+async function entry(recipe: string): Promise<SheetEntry> {
+  const { crystal } = await recipeFrom(recipe);
+  const habit = closedOrThrow(polyhedron(crystal));
+  const { mineral, title } = crystal;
+  return mineral ? { habit, caption: mineral.name, subcaption: mineral.habit } : { habit, caption: title };
+}
