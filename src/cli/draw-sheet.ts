@@ -2,7 +2,7 @@ import { PRESET_FOLDER } from '../disk/preset-folder.ts';
 import { contactSheet, type SheetEntry } from '../draw/contact-sheet.ts';
 import { closedOrThrow } from '../habit/closing.ts';
 import { polyhedron } from '../habit/habit.ts';
-import { preset } from '../recipe/shelf.ts';
+import { preset, recipeNames } from '../recipe/shelf.ts';
 import { type LookFlags, lookFrom, viewFrom } from './draw-options.ts';
 import { UsageError } from './failure.ts';
 import { recipeFrom } from './recipe-input.ts';
@@ -37,12 +37,17 @@ function recipesOf(word: string): string[] {
       Object.keys(preset(PRESET_FOLDER, 'minerals', name)!.habits).map((habit) => `${name}/${habit}`),
     );
   const set = preset(PRESET_FOLDER, 'sets', word);
-  return set ? Object.keys(set.recipes).map((key) => `${word}/${key}`) : [word];
+  return set ? recipeNames(set).map((key) => `${word}/${key}`) : [word];
 }
 
+/** Minerals are captioned by name and habit, crystals of a set by the form they show, others by their title. */
 async function entry(recipe: string): Promise<SheetEntry> {
   const { crystal } = await recipeFrom(recipe);
   const habit = closedOrThrow(polyhedron(crystal));
-  const { mineral, title } = crystal;
-  return mineral ? { habit, caption: mineral.name, subcaption: mineral.habit } : { habit, caption: title };
+  const { mineral, title, forms } = crystal;
+  if (mineral) return { habit, caption: mineral.name, subcaption: mineral.habit };
+  const isOfSet = PRESET_FOLDER.list('sets').includes(recipe.split('/')[0]!);
+  return { habit, caption: isOfSet ? capital(forms[0]!.form.name) : title };
 }
+
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

@@ -13,12 +13,13 @@ interface DrawFlags {
   bare?: true;
   sheet?: true;
   columns?: string;
+  key?: true;
 }
 
 export function drawCommand(): Command {
   return new Command('draw')
     .description('Draw crystals as SVG, singly or together on a contact sheet.')
-    .argument('<recipe...>', 'presets, YAML files or -; with --sheet also "all", or the name of a set')
+    .argument('[recipe...]', 'presets, YAML files or -; with --sheet also "all", or the name of a set')
     .option('-o, --out <file>', 'where the drawing goes; - for standard output')
     .option(
       '-v, --view <view>',
@@ -34,6 +35,7 @@ export function drawCommand(): Command {
     .option('--bare', 'without title, legend and scale bar')
     .option('--sheet', 'all on one contact sheet')
     .option('--columns <number>', 'of the contact sheet')
+    .option('--key', 'the key to the symbols in which rods end')
     .addHelpText(
       'after',
       '\nExamples:\n  goniolith draw quartz --axes --labels letters\n  goniolith draw calcite --view c --lines --out calcite.svg\n  goniolith draw all --sheet',
@@ -48,9 +50,13 @@ async function draw(recipes: string[], flags: DrawFlags): Promise<void> {
     import('../disk/write-files.ts'),
     import('node:path'),
   ]);
-  const pictures = flags.sheet
-    ? [await sheet(recipes, flags)]
-    : await Promise.all(recipes.map((recipe) => drawing(recipe, flags)));
+  if (recipes.length === 0 && !flags.key) {
+    const { UsageError } = await import('./failure.ts');
+    throw new UsageError('draw needs a recipe, for instance: goniolith draw quartz');
+  }
+  const drawEach = (): Promise<{ name: string; svg: string }[]> =>
+    Promise.all(recipes.map((recipe) => drawing(recipe, flags)));
+  const pictures = flags.key ? [await keyPicture()] : flags.sheet ? [await sheet(recipes, flags)] : await drawEach();
   if (flags.out === '-') return result(pictures.map(({ svg }) => svg).join('\n'));
   if (flags.out !== undefined && pictures.length > 1) {
     const { UsageError } = await import('./failure.ts');
@@ -62,4 +68,9 @@ async function draw(recipes: string[], flags: DrawFlags): Promise<void> {
     result(file);
   }
   return remark(`  ${pictures.length === 1 ? 'One drawing' : `${pictures.length} drawings`}, orthographic.`);
+}
+
+async function keyPicture(): Promise<{ name: string; svg: string }> {
+  const { axisKey } = await import('../draw/axis-key.ts');
+  return { name: 'axis-key', svg: axisKey() };
 }

@@ -1,7 +1,7 @@
 import { pointGroup } from '../crystal/point-group.ts';
 import { printSymbol } from '../crystal/symbol.ts';
 import { PRESET_FOLDER } from '../disk/preset-folder.ts';
-import { preset } from '../recipe/shelf.ts';
+import { preset, recipeNames } from '../recipe/shelf.ts';
 
 interface Listing {
   readonly heads: string[];
@@ -14,11 +14,10 @@ export function listPresets(words: readonly string[]): Listing {
   const [only] = words;
   const set = words.length === 1 && only ? preset(PRESET_FOLDER, 'sets', only.toLowerCase()) : null;
   if (set && only) {
-    const rows = Object.entries(set.recipes).map(([key, recipe]) => [
-      `${only.toLowerCase()}/${key}`,
-      printSymbol(String(recipe.pointGroup ?? '')),
-      recipe.title ?? '',
-    ]);
+    const rows = recipeNames(set).map((name) => {
+      const { pointGroup = '', title = '' } = set.recipes[name]!;
+      return [`${only.toLowerCase()}/${name}`, printSymbol(String(pointGroup)), title];
+    });
     return { heads: ['recipe', 'point group', 'title'], rows, note: `${set.name}. ${set.note}` };
   }
   const minerals = PRESET_FOLDER.list('minerals').map(mineralRow);

@@ -20,20 +20,22 @@ export function bigRow(x: number, y: number, z: number, offset: Fraction): BigRo
 const triple = (a: BigRow, b: BigRow, c: BigRow): bigint =>
   a[0] * (b[1] * c[2] - b[2] * c[1]) + a[1] * (b[2] * c[0] - b[0] * c[2]) + a[2] * (b[0] * c[1] - b[1] * c[0]);
 
+const sign = (value: bigint): -1 | 0 | 1 => (value === 0n ? 0 : value > 0n ? 1 : -1);
+
+/** Sign of the determinant of three normals. */
+export const bigTriple = (a: BigRow, b: BigRow, c: BigRow): -1 | 0 | 1 => sign(triple(a, b, c));
+
 /** Sign of h·x − D for plane p at the corner of a, b and c, which must have a single point in common. */
 export function bigSide(a: BigRow, b: BigRow, c: BigRow, p: BigRow): -1 | 0 | 1 {
   const det = triple(a, b, c);
   const sum = a[3] * triple(p, b, c) + b[3] * triple(p, c, a) + c[3] * triple(p, a, b) - p[3] * det;
-  if (sum === 0n) return 0;
-  return sum > 0n === det > 0n ? 1 : -1;
+  return det > 0n ? sign(sum) : sign(-sum);
 }
 
 /** Sign of component k of the cross product of two normals. */
 export function bigCross(a: BigRow, b: BigRow, k: number): -1 | 0 | 1 {
   const [i, j] = [(k + 1) % 3, (k + 2) % 3];
-  const value = a[i]! * b[j]! - a[j]! * b[i]!;
-  if (value === 0n) return 0;
-  return value > 0n ? 1 : -1;
+  return sign(a[i]! * b[j]! - a[j]! * b[i]!);
 }
 
 /** The corner of three planes, by Cramer's rule, each coordinate to within 2^-60 of itself. */

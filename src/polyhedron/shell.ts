@@ -1,7 +1,7 @@
 import { CORNER, meet } from './meet.ts';
 import type { PlaneTable } from './plane-table.ts';
 import { doubles, integers, withRoom } from './room.ts';
-import { exactSide, ULP } from './side.ts';
+import { exactMeet, exactSide, ULP } from './side.ts';
 
 /**
  * The surface of a convex solid as half-edges. Each runs counter-clockwise round its face, seen from outside, and has a
@@ -58,33 +58,26 @@ export class Shell {
     }
   }
 
-  /** The vertex where three planes meet, at the end of a half-edge. */
+  /** The vertex where three planes meet, on a half-edge that is to end there. There must be room. */
   addVertex(a: number, b: number, c: number, edge: number): number {
     const v = this.vertices;
-    if (v === this.into.length) {
-      this.into = withRoom(this.into, v + 1, integers);
-      this.place = withRoom(this.place, CORNER * (v + 1), doubles);
-      this.meeting = withRoom(this.meeting, 3 * (v + 1), integers);
-    }
     const { place, meeting } = this;
-    meet(this.planes.rows, a, b, c, place, CORNER * v);
     const at = CORNER * v;
+    meet(this.planes.rows, a, b, c, place, at);
     const far = Math.max(Math.abs(place[at]!), Math.abs(place[at + 1]!), Math.abs(place[at + 2]!));
     place[at + 3] = place[at + 3]! + 8 * ULP * far;
     meeting[3 * v] = a;
     meeting[3 * v + 1] = b;
     meeting[3 * v + 2] = c;
     this.into[v] = edge;
-    this.end[edge] = v;
     this.vertices += 1;
     this.alive += 1;
     return v;
   }
 
-  /** A new pair of half-edges; answers the first, its twin follows it. */
+  /** A new pair of half-edges; answers the first, its twin follows it. There must be room. */
   addEdge(face: number, end: number, twinFace: number, twinEnd: number): number {
     const edge = this.edges;
-    if (edge + 2 > this.next.length) this.makeEdgeRoom(edge + 2);
     this.face[edge] = face;
     this.end[edge] = end;
     this.twin[edge] = edge + 1;
@@ -107,12 +100,28 @@ export class Shell {
     return exactSide(this.planes, meeting[3 * v]!, meeting[3 * v + 1]!, meeting[3 * v + 2]!, p);
   }
 
-  private makeEdgeRoom(room: number): void {
-    this.next = withRoom(this.next, room, integers);
-    this.previous = withRoom(this.previous, room, integers);
-    this.twin = withRoom(this.twin, room, integers);
-    this.face = withRoom(this.face, room, integers);
-    this.end = withRoom(this.end, room, integers);
+  /** Exact vertex, rounded to doubles. */
+  exactPlace(v: number): readonly [number, number, number] {
+    const { meeting } = this;
+    return exactMeet(this.planes, meeting[3 * v]!, meeting[3 * v + 1]!, meeting[3 * v + 2]!);
+  }
+
+  /** Makes room for so many new vertices and edges. */
+  makeRoom(count: number): void {
+    const edges = this.edges + 2 * count;
+    if (edges > this.next.length) {
+      this.next = withRoom(this.next, edges, integers);
+      this.previous = withRoom(this.previous, edges, integers);
+      this.twin = withRoom(this.twin, edges, integers);
+      this.face = withRoom(this.face, edges, integers);
+      this.end = withRoom(this.end, edges, integers);
+    }
+    const vertices = this.vertices + count;
+    if (vertices > this.into.length) {
+      this.into = withRoom(this.into, vertices, integers);
+      this.place = withRoom(this.place, CORNER * vertices, doubles);
+      this.meeting = withRoom(this.meeting, 3 * vertices, integers);
+    }
   }
 }
 

@@ -1,4 +1,4 @@
-import { bigCross, bigMeet, bigSide } from './big.ts';
+import { bigCross, bigMeet, bigSide, bigTriple } from './big.ts';
 import type { Offset } from './offset.ts';
 import { PLANE, type PlaneTable } from './plane-table.ts';
 
@@ -29,6 +29,18 @@ export function exactCross(table: PlaneTable, a: number, b: number, k: number): 
   const doubt = exact ? 0 : 3 * ULP * (Math.abs(left) + Math.abs(right));
   if (Math.abs(left - right) > doubt) return left > right ? 1 : -1;
   return exact ? 0 : bigCross(table.bigRow(a), table.bigRow(b), k);
+}
+
+/** Exact sign of the determinant of three planes' normals. */
+export function exactTriple(table: PlaneTable, a: number, b: number, c: number): -1 | 0 | 1 {
+  const { rows, whole } = table;
+  const det = triple(table, a, b, c);
+  const exact = (whole[a]! & whole[b]! & whole[c]!) === 1;
+  // Six products, each with at most five roundings.
+  const size = rows[PLANE * a + 4]! * rows[PLANE * b + 4]! * rows[PLANE * c + 4]!;
+  const doubt = exact ? 0 : 8 * ULP * 6 * size;
+  if (Math.abs(det) > doubt) return det > 0 ? 1 : -1;
+  return exact ? 0 : bigTriple(table.bigRow(a), table.bigRow(b), table.bigRow(c));
 }
 
 /** Where three planes meet, exactly, then rounded to doubles. */

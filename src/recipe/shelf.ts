@@ -1,4 +1,5 @@
 import { nearest } from '../crystal/nearest.ts';
+import { SETTINGS } from '../crystal/setting.ts';
 import { type Problem, RecipeError } from './problem.ts';
 import type { MineralPreset, PrinterProfile, SetPreset } from './schema.ts';
 import { readText, type Written } from './text.ts';
@@ -64,6 +65,15 @@ export function presetRecipe(shelf: Shelf, id: string): Written {
       hint: `Name one of them: ${name}/${Object.keys(set.recipes)[0]}; \`goniolith presets ${name}\` lists them.`,
     });
   return refuse({ code: 'unknown-mineral', ...unknownMineral(shelf, name) });
+}
+
+/** Names of a set's recipes in the usual order of their point groups, from triclinic to cubic. */
+export function recipeNames({ recipes }: SetPreset): string[] {
+  const place = (name: string): number => {
+    const symbol = String(recipes[name]?.pointGroup);
+    return SETTINGS.findIndex(({ key, pointGroup }) => key === symbol || pointGroup === symbol);
+  };
+  return Object.keys(recipes).sort((a, b) => place(a) - place(b));
 }
 
 export const unknownMineral = (shelf: Shelf, name: string) => ({

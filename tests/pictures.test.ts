@@ -1,0 +1,32 @@
+import { readFileSync, writeFileSync } from 'node:fs';
+import { fileURLToPath } from 'node:url';
+import { describe, expect, it } from 'vitest';
+import { goniolith } from './cli/run.ts';
+
+/**
+ * The pictures in the README are the project's own drawings. After a change that is meant, look at them and renew them
+ * with: npm run pictures
+ */
+const PICTURES: Readonly<Record<string, readonly string[]>> = {
+  'quartz.svg': ['quartz', '--axes', '--labels', 'letters', '--size', '70'],
+  'fluorite.svg': ['fluorite/hexoctahedral', '--axes', '4,3', '--labels', 'indices', '--size', '60'],
+  'tetrahedrite.svg': ['tetrahedrite', '--axes', '-4', '--labels', 'letters', '--size', '60'],
+  'gypsum.svg': ['gypsum', '--axes', '--labels', 'letters', '--size', '60'],
+  'quartz-along-c.svg': ['quartz/right-handed', '--view', 'c', '--bare', '--labels', 'letters'],
+  'quartz-onto-m.svg': ['quartz/right-handed', '--view', '(10-10)', '--bare', '--labels', 'letters'],
+  'quartz-lines.svg': ['quartz/right-handed', '--lines', '--bare'],
+  'axis-key.svg': ['--key'],
+  'minerals.svg': ['all', '--sheet'],
+  'groups.svg': ['32-groups', '--sheet', '--columns', '8'],
+};
+
+const path = (name: string): string => fileURLToPath(new URL(`../presets/pictures/${name}`, import.meta.url));
+
+describe('the picture', () => {
+  it.each(Object.entries(PICTURES))('%s is what the project draws today', async (name, words) => {
+    const { code, out } = await goniolith('draw', ...words, '--out', '-');
+    expect(code).toBe(0);
+    if (process.env.GONIOLITH_RENEW_PICTURES) writeFileSync(path(name), out);
+    expect(readFileSync(path(name), 'utf8') === out, `${name} is out of date: npm run pictures`).toBe(true);
+  });
+});
