@@ -9,26 +9,26 @@ import type { RecipeInput } from '../recipe/schema.ts';
 import { presetRecipe } from '../recipe/shelf.ts';
 import { LARGEST_RECIPE, readText, type Written } from '../recipe/text.ts';
 
-/** The text that the help of every verb has for its recipe. */
-export const RECIPE_ARGUMENT = 'a preset (quartz, pyrite/pyritohedron), a YAML file, or - for standard input';
-
 /**
  * Reads the recipe that an argument names: `-` is standard input, what looks like a file or is one is read as a file,
  * all else is the name of a preset.
  * @param flags what flags say in place of the recipe's `print`
  */
 export async function recipeFrom(argument: string, flags: NonNullable<RecipeInput['print']> = {}): Promise<Resolved> {
-  const written = await writtenFrom(argument);
-  return resolve(Object.keys(flags).length > 0 ? withFlags(written, flags) : written, PRESET_FOLDER);
+  const isPreset = !isFile(argument);
+  const written = isPreset ? presetRecipe(PRESET_FOLDER, argument) : await fromFile(argument);
+  const whole = Object.keys(flags).length > 0 ? withFlags(written, flags) : written;
+  if (isPreset) return resolve(whole, PRESET_FOLDER);
+  const { structureProblems } = await import('../recipe/structure.ts');
+  return resolve(whole, PRESET_FOLDER, structureProblems(whole.value));
 }
 
-async function writtenFrom(argument: string): Promise<Written> {
-  const isFile = argument === '-' || /\.(ya?ml|json)$/i.test(argument) || /^[.~]?[/\\]|^\.\./.test(argument);
-  if (!isFile && !existsSync(argument)) return presetRecipe(PRESET_FOLDER, argument);
-  if (!isFile && /^\w+$/.test(argument)) {
-    const known = PRESET_FOLDER.list('minerals').includes(argument.toLowerCase());
-    if (known) return presetRecipe(PRESET_FOLDER, argument);
-  }
+function isFile(argument: string): boolean {
+  if (argument === '-' || /\.(ya?ml|json)$/i.test(argument) || /^[.~]?[/\\]|^\.\./.test(argument)) return true;
+  return existsSync(argument) && !PRESET_FOLDER.list('minerals').includes(argument.toLowerCase().split('/')[0]!);
+}
+
+async function fromFile(argument: string): Promise<Written> {
   const name = argument === '-' ? 'standard input' : argument;
   const text = decodeText(await readInput(argument, { limit: LARGEST_RECIPE }), name);
   const written = readText(text, name);

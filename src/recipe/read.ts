@@ -1,6 +1,7 @@
 import type { Resolved } from './crystal.ts';
 import { resolve } from './resolve.ts';
 import { presetRecipe, type Shelf } from './shelf.ts';
+import { structureProblems } from './structure.ts';
 import { readText } from './text.ts';
 
 /** A preset's name: words of letters, digits, - and _, with at most one /. Anything else in a text is a recipe. */
@@ -11,6 +12,7 @@ const PRESET_NAME = /^\s*\w[\w.-]*(\/[\w.-]+)?\s*$/;
  * @throws RecipeError with all problems found
  */
 export function read(recipe: unknown, shelf: Shelf, name = 'recipe'): Resolved {
-  if (typeof recipe !== 'string') return resolve({ value: recipe, origin: { name } }, shelf);
-  return resolve(PRESET_NAME.test(recipe) ? presetRecipe(shelf, recipe) : readText(recipe, name), shelf);
+  if (typeof recipe === 'string' && PRESET_NAME.test(recipe)) return resolve(presetRecipe(shelf, recipe), shelf);
+  const written = typeof recipe === 'string' ? readText(recipe, name) : { value: recipe, origin: { name } };
+  return resolve(written, shelf, structureProblems(written.value));
 }

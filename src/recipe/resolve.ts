@@ -13,7 +13,6 @@ import { type Origin, type Path, type Problem, type ProblemCode, RecipeError } f
 import { QuantityError } from './quantity.ts';
 import type { CellInput, FaceInput, MineralPreset, PrinterProfile, RecipeInput } from './schema.ts';
 import { either, preset, type Shelf, unknownHabit, unknownMineral } from './shelf.ts';
-import { structureProblems } from './structure.ts';
 import type { Written } from './text.ts';
 
 export const USUAL_PRINTER = 'fdm-0.4';
@@ -21,10 +20,12 @@ const DISTANCES = { least: 1e-6, most: 1e6 };
 
 /**
  * Understands a recipe: looks up presets, reads symbols, completes the cell.
+ * @param faults what `structureProblems` found in it; presets need no such look. It is handed in because the library
+ * behind it takes longer to load than a crystal takes to compute.
  * @throws RecipeError with every problem found, each with its place
  */
-export function resolve(written: Written, shelf: Shelf): Resolved {
-  return new Reading(written, shelf).result();
+export function resolve(written: Written, shelf: Shelf, faults: readonly Problem[] = []): Resolved {
+  return new Reading(written, shelf, faults).result();
 }
 
 type ChosenMineral = MineralPreset & { readonly id: string; readonly habit: string };
@@ -38,9 +39,10 @@ class Reading {
   constructor(
     written: Written,
     private readonly shelf: Shelf,
+    faults: readonly Problem[],
   ) {
     this.origin = written.origin;
-    this.problems = structureProblems(written.value);
+    this.problems = [...faults];
     this.recipe = (typeof written.value === 'object' && written.value !== null ? written.value : {}) as RecipeInput;
   }
 
