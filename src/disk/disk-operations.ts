@@ -1,6 +1,7 @@
 import { linkSync, lstatSync, renameSync, rmdirSync, unlinkSync } from 'node:fs';
-import { access, constants, lstat, mkdir, open, readFile } from 'node:fs/promises';
+import { access, constants, lstat, open, readFile } from 'node:fs/promises';
 import { systemCode } from './disk-error.ts';
+import { makeFolders } from './make-folders.ts';
 
 /** What `writeFiles` asks of the file system; tests put failing ones in place of these. */
 export interface DiskOperations {
@@ -23,7 +24,7 @@ export interface DiskOperations {
 
 /** The real file system. */
 export const DISK: DiskOperations = {
-  makeFolder: (path) => mkdir(path, { recursive: true }),
+  makeFolder: makeFolders,
   kindOf: async (path) => {
     try {
       const found = await lstat(path);

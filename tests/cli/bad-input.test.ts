@@ -183,6 +183,14 @@ describe('a file that is', () => {
   });
 });
 
+describe('an output folder that cannot be made', () => {
+  it.runIf(process.platform === 'linux')('is told so at once', async () => {
+    const { code, err } = await goniolith('make', 'quartz', '--out', '/proc/goniolith/out');
+    expect(err).toMatch(/Cannot make the folder \/proc\/goniolith\/out/);
+    expect(code).toBe(1);
+  });
+});
+
 describe('wrong use', () => {
   it.each([
     [['mak', 'quartz'], /unknown command 'mak'/],
