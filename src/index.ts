@@ -10,12 +10,12 @@ import { parseFace, readOptions } from './crystal/indices.ts';
 import { interfacialAngle as angleBetween } from './crystal/interfacial.ts';
 import { type PointGroup, pointGroup } from './crystal/point-group.ts';
 import { PRESET_FOLDER } from './disk/preset-folder.ts';
-import { polyhedron } from './habit/habit.ts';
 import { type Inspection, inspection } from './inspect.ts';
 import { type Made, makeModel } from './make.ts';
 import type { Crystal, Resolved } from './recipe/crystal.ts';
 import { read } from './recipe/read.ts';
 import type { RecipeInput } from './recipe/schema.ts';
+import { polyhedron } from './shape/shape.ts';
 
 const resolved = (recipe: RecipeInput | string): Resolved => read(recipe, PRESET_FOLDER);
 
@@ -42,14 +42,16 @@ export type FaceIndices = readonly number[] | string;
  * @param group a group, or its symbol in any known spelling
  * @throws CrystalError
  */
-export function form(group: PointGroup | string, indices: FaceIndices): Form {
+export function form(group: PointGroup | string, indices: FaceIndices): Omit<Form, 'imageOf' | 'carrier'> {
   const known = typeof group === 'string' ? pointGroup(group) : group;
-  return formOf(known, parseFace(indices, readOptions(known.axes)));
+  const { imageOf: _, carrier: __, ...facts } = formOf(known, parseFace(indices, readOptions(known.axes)));
+  return facts;
 }
 
 /**
  * Angle in degrees between the outward normals of two faces.
- * @param cell a, b, c in ångström, angles in degrees; what is left out is 90°, b = a, c = a
+ * @param cell a, b, c in ångström, angles in degrees; what is left out is 90°, b = a, c = a. With a = b and gamma = 120°
+ * faces may have four indices
  * @throws CrystalError
  */
 export function interfacialAngle(cell: Partial<Cell>, face1: FaceIndices, face2: FaceIndices): number {
@@ -59,7 +61,8 @@ export function interfacialAngle(cell: Partial<Cell>, face1: FaceIndices, face2:
   return angleBetween(metric(whole, 'triclinic'), parseFace(face1, options), parseFace(face2, options));
 }
 
-export type { Habit } from './habit/habit.ts';
 export { recipeJsonSchema } from './recipe/schema.ts';
+export { distanceRange, vanishesAt } from './shape/presence.ts';
+export type { Shape } from './shape/shape.ts';
 export type { Cell, Crystal, Form, Inspection, Made, PointGroup, RecipeInput };
 export { pointGroup, polyhedron };

@@ -1,19 +1,27 @@
 import type { Cell } from './crystal/cell.ts';
 import { symmetryElements } from './crystal/elements.ts';
 import { printFace } from './crystal/indices.ts';
-import { closingAdvice } from './habit/closing.ts';
-import { type ClosedHabit, type Habit, isClosed } from './habit/habit.ts';
-import { shownForms, vanishesAt } from './habit/presence.ts';
-import { millimetresPerUnit } from './habit/scale.ts';
 import { edges, faceCorners } from './polyhedron/measures.ts';
-import type { Resolved } from './recipe/crystal.ts';
+import type { MineralFacts, Resolved } from './recipe/crystal.ts';
+import { closingAdvice } from './shape/closing.ts';
+import { shownForms, vanishesAt } from './shape/presence.ts';
+import { millimetresPerUnit } from './shape/scale.ts';
+import { type ClosedShape, isClosed, type Shape } from './shape/shape.ts';
 
 type Triple = [number, number, number];
 
 /** Everything known about a crystal, as plain data. */
 export interface Inspection {
   title: string;
-  mineral: { id: string; name: string; formula: string; habit: string; source: string } | null;
+  mineral: {
+    id: string;
+    name: string;
+    formula: string;
+    /** Null when the recipe gives forms of its own. */
+    habit: string | null;
+    /** Where the cell comes from; null when the recipe gives a cell or group of its own. */
+    source: string | null;
+  } | null;
   cell: Cell;
   pointGroup: {
     /** One of the 32 Hermann–Mauguin symbols. */
@@ -80,12 +88,12 @@ export interface Inspection {
 }
 
 /** Gathers what is known about a crystal; never fails on an open one. */
-export function inspection({ crystal, print }: Resolved, habit: Habit): Inspection {
+export function inspection({ crystal, print }: Resolved, shape: Shape): Inspection {
   const { group, mineral } = crystal;
   const elements = symmetryElements(group);
   return {
     title: crystal.title,
-    mineral,
+    mineral: mineral && mineralFacts(mineral),
     cell: crystal.cell,
     pointGroup: {
       hermannMauguin: group.hermannMauguin,
@@ -104,13 +112,21 @@ export function inspection({ crystal, print }: Resolved, habit: Habit): Inspecti
       mirrorPlanes: elements.mirrorPlanes.map(({ plane }) => ({ normal: copy(plane) })),
       lines: elements.lines.map((line) => ({ ...line, direction: copy(line.direction) })),
     },
-    forms: formRows(habit),
-    ...(isClosed(habit) ? closedParts(habit) : openParts(habit)),
-    ...(isClosed(habit) && print.size && { object: objectOf(habit, millimetresPerUnit(habit, print.size)) }),
+    forms: formRows(shape),
+    ...(isClosed(shape) ? closedParts(shape) : openParts(shape)),
+    ...(isClosed(shape) && print.size && { object: objectOf(shape, millimetresPerUnit(shape, print.size)) }),
   };
 }
 
-function formRows({ crystal, solid, measures }: Habit): Inspection['forms'] {
+const mineralFacts = ({ id, name, formula, habit, source }: MineralFacts): Inspection['mineral'] => ({
+  id,
+  name,
+  formula,
+  habit,
+  source,
+});
+
+function formRows({ crystal, solid, measures }: Shape): Inspection['forms'] {
   const shown = shownForms(solid);
   return crystal.forms.map(({ form, distance, letter }, place) => {
     const planes = [...solid.planes.form.keys()].filter((plane) => solid.planes.form[plane] === place);
@@ -132,8 +148,8 @@ function formRows({ crystal, solid, measures }: Habit): Inspection['forms'] {
   });
 }
 
-function closedParts(habit: ClosedHabit): Pick<Inspection, 'faces' | 'vertices' | 'bounded' | 'solid'> {
-  const { crystal, solid, measures } = habit;
+function closedParts(shape: ClosedShape): Pick<Inspection, 'faces' | 'vertices' | 'bounded' | 'solid'> {
+  const { crystal, solid, measures } = shape;
   const vertices = Array.from({ length: solid.vertices.length / 3 }, (_, i) => tripleAt(solid.vertices, i));
   return {
     bounded: true,
@@ -157,23 +173,23 @@ function closedParts(habit: ClosedHabit): Pick<Inspection, 'faces' | 'vertices' 
       centroid: copy(measures.centroid),
       inscribedRadius: measures.inscribedRadius,
       circumscribedRadius: measures.circumscribedRadius,
-      angles: angleTable(habit),
+      angles: angleTable(shape),
     },
   };
 }
 
-function openParts(habit: Habit): Pick<Inspection, 'faces' | 'vertices' | 'bounded' | 'openAlong' | 'advice'> {
+function openParts(shape: Shape): Pick<Inspection, 'faces' | 'vertices' | 'bounded' | 'openAlong' | 'advice'> {
   return {
     bounded: false,
     faces: [],
     vertices: [],
-    openAlong: habit.openAlong.map(copy),
-    advice: closingAdvice(habit),
+    openAlong: shape.openAlong.map(copy),
+    advice: closingAdvice(shape),
   };
 }
 
 /** Angles at the solid's edges; those that agree to a millionth of a degree between the same two forms are one kind. */
-function angleTable({ solid, measures }: ClosedHabit): NonNullable<Inspection['solid']>['angles'] {
+function angleTable({ solid, measures }: ClosedShape): NonNullable<Inspection['solid']>['angles'] {
   const kinds = new Map<string, { forms: [number, number]; interfacial: number; dihedral: number; edges: number }>();
   for (const { faces, dihedral } of edges(solid, measures)) {
     const [a, b] = faces.map((plane) => solid.planes.form[plane]!).sort((p, q) => p - q) as [number, number];
@@ -187,7 +203,7 @@ function angleTable({ solid, measures }: ClosedHabit): NonNullable<Inspection['s
   );
 }
 
-function objectOf({ measures }: ClosedHabit, scale: number): NonNullable<Inspection['object']> {
+function objectOf({ measures }: ClosedShape, scale: number): NonNullable<Inspection['object']> {
   const { low, high } = measures;
   return {
     millimetresPerUnit: scale,

@@ -1,18 +1,19 @@
-import { checkMesh } from './files/mesh/check.ts';
-import type { MeshReport } from './files/mesh/report.ts';
+import { checkMesh } from './files/check/check.ts';
+import type { MeshReport } from './files/check/report.ts';
 import { weldFloat32 } from './files/mesh/weld.ts';
 import { readStl } from './files/stl/read.ts';
 import { writeStl } from './files/stl/write.ts';
 import { writeStlText } from './files/stl/write-text.ts';
-import { closedOrThrow } from './habit/closing.ts';
-import { type ClosedHabit, polyhedron } from './habit/habit.ts';
-import { ObjectError } from './habit/object-error.ts';
-import { millimetresPerUnit } from './habit/scale.ts';
-import type { Mesh } from './print/mesh.ts';
+import { extentsOf, type Mesh, meshVolume } from './print/mesh.ts';
 import { assemble, ontoBed, type Part } from './print/part.ts';
 import { printedParts } from './print/parts.ts';
 import type { Resolved } from './recipe/crystal.ts';
-import { USUAL_SIZE } from './recipe/print-plan.ts';
+import { LARGEST_SIZE, USUAL_SIZE } from './recipe/print-plan.ts';
+import type { PrinterProfile } from './recipe/schema.ts';
+import { closedOrThrow } from './shape/closing.ts';
+import { ObjectError } from './shape/object-error.ts';
+import { millimetresPerUnit } from './shape/scale.ts';
+import { type ClosedShape, polyhedron } from './shape/shape.ts';
 
 /** A file ready to be written. */
 export interface MadeFile {
@@ -25,7 +26,7 @@ export interface MadeFile {
 }
 
 export interface Made {
-  readonly habit: ClosedHabit;
+  readonly shape: ClosedShape;
   readonly millimetresPerUnit: number;
   readonly parts: readonly Part[];
   readonly files: readonly MadeFile[];
@@ -33,7 +34,7 @@ export interface Made {
   readonly remarks: readonly string[];
 }
 
-/** Relative difference allowed between the volume of a written crystal and that of the exact polyhedron. */
+/** Relative difference allowed between the volume of what is read back and that of the part in double precision. */
 const VOLUME_TOLERANCE = 1e-5;
 
 /**
@@ -42,23 +43,42 @@ const VOLUME_TOLERANCE = 1e-5;
  * @throws ObjectError when the crystal is open, cannot carry what is asked, or a file fails its own check
  */
 export async function makeModel(resolved: Resolved): Promise<Made> {
-  const habit = closedOrThrow(polyhedron(resolved.crystal));
+  const shape = closedOrThrow(polyhedron(resolved.crystal));
   const { print, crystal } = resolved;
-  const scale = millimetresPerUnit(habit, print.size ?? USUAL_SIZE);
-  const { parts, remarks } = await printedParts(habit, scale, print);
+  const scale = millimetresPerUnit(shape, print.size ?? USUAL_SIZE);
+  const { parts, remarks } = await printedParts(shape, scale, print);
   const stem = fileStem(resolved);
-  const titled = (what: string): string => `${crystal.title}: ${what}`;
   const write = (name: string, holds: string, mesh: Mesh): MadeFile =>
-    writeChecked(name, holds, mesh, titled(holds), print.stl);
+    writeChecked(name, holds, mesh, `${crystal.title}: ${holds}`, print.stl);
   const whole = ontoBed([assemble(parts)])[0]!;
+  refuseGiants(whole);
   const files = [write(`${stem}.stl`, parts.length === 1 ? parts[0]!.purpose : 'all parts in their places', whole)];
   if (parts.length > 1)
     for (const part of parts) {
-      const times = part.placed.length > 1 ? ` (print ${part.placed.length})` : '';
+      const times = part.placed.length > 1 ? `; print ${part.placed.length}` : '';
       files.push(write(`${stem}-${part.name}.stl`, `${part.purpose}${times}`, part.mesh));
     }
-  if (parts.length === 1 && !print.axes) assertVolume(files[0]!, habit.measures.volume * scale ** 3);
-  return { habit, millimetresPerUnit: scale, parts, files, remarks };
+  const bed = parts.flatMap((part) => bedRemark(part, print.printer));
+  return { shape, millimetresPerUnit: scale, parts, files, remarks: [...remarks, ...bed] };
+}
+
+/** The size limit holds for the whole model, rods included. */
+function refuseGiants(whole: Mesh): void {
+  const longest = Math.max(...extentsOf(whole));
+  if (longest <= LARGEST_SIZE) return;
+  const message = `the whole model is ${Math.round(longest)} mm long, more than ${LARGEST_SIZE} mm (10 m)`;
+  throw new ObjectError('size', message, 'choose a smaller size, or rods that reach less far');
+}
+
+/** A part that does not fit the printer's space however it is turned by right angles. */
+function bedRemark({ name, mesh }: Part, printer: PrinterProfile): string[] {
+  const descending = (a: number, b: number): number => b - a;
+  const [part, bed] = [[...extentsOf(mesh)].sort(descending), [...printer.bed].sort(descending)];
+  if (part.every((extent, i) => extent <= bed[i]!)) return [];
+  const sizes = [part, bed].map((all) => all.map((value) => Math.round(value)).join(' × '));
+  return [
+    `The ${name}, ${sizes[0]} mm, is larger than the ${sizes[1]} mm that "${printer.name}" can print: choose a smaller size or another printer.`,
+  ];
 }
 
 function writeChecked(name: string, holds: string, mesh: Mesh, title: string, kind: 'binary' | 'text'): MadeFile {
@@ -67,32 +87,32 @@ function writeChecked(name: string, holds: string, mesh: Mesh, title: string, ki
   const back = readStl(bytes);
   const check = checkMesh(back.mesh, back.normals);
   if (!check.ok) throw notSound(name, check.problems.map(({ message }) => message).join(' '));
+  const off = Math.abs(check.volume / meshVolume(mesh) - 1);
+  if (off > VOLUME_TOLERANCE) throw notSound(name, `its volume is off by ${off.toExponential(1)} of itself.`);
   return { name, bytes, holds, check };
-}
-
-function assertVolume({ name, check }: MadeFile, exact: number): void {
-  const off = Math.abs(check.volume / exact - 1);
-  if (off > VOLUME_TOLERANCE) throw notSound(name, `Its volume differs from the crystal's by ${off.toExponential(1)}.`);
 }
 
 const notSound = (name: string, why: string): ObjectError =>
   new ObjectError(
     'not-sound',
     `${name} failed its own check and is not written: ${why}`,
-    'try a slightly different size or rod diameter, and please report the recipe',
+    'the crystal may be too slender to write; else try a slightly different size, and please report the recipe',
   );
 
 /** File name without ending: what the recipe asks for, else the mineral and habit, else the title. */
-export function fileStem({ crystal, print }: Resolved): string {
-  return print.file ?? slug(crystal.mineral ? crystal.mineral.id + habitSuffix(crystal.mineral) : crystal.title);
+export function fileStem({ crystal: { mineral, title }, print }: Resolved): string {
+  if (print.file !== null) return print.file;
+  if (!mineral?.habit) return slug(title);
+  return slug(mineral.isFirstHabit ? mineral.id : `${mineral.id}-${mineral.habit}`);
 }
 
-const habitSuffix = ({ habit, firstHabit }: { habit: string; firstHabit: string }): string =>
-  habit === firstHabit ? '' : `-${habit}`;
-
 /** Lower-case letters, digits and hyphens: safe as a file name everywhere. */
-function slug(title: string): string {
-  const plain = title.normalize('NFKD').replace(/\p{M}/gu, '').toLowerCase();
+export function slug(title: string): string {
+  const plain = title
+    .replace(/(?<![\p{L}\p{N}])-(?=\d)/gu, 'bar')
+    .normalize('NFKD')
+    .replace(/\p{M}/gu, '')
+    .toLowerCase();
   return (
     plain
       .replace(/\//g, '_')

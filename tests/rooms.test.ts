@@ -10,13 +10,14 @@ const MAY_IMPORT: Readonly<Record<string, readonly string[]>> = {
   crystal: [],
   polyhedron: [],
   recipe: ['crystal'],
-  habit: ['crystal', 'polyhedron', 'recipe'],
-  print: ['crystal', 'polyhedron', 'recipe', 'habit'],
+  shape: ['crystal', 'polyhedron', 'recipe'],
+  rods: ['crystal', 'polyhedron', 'recipe', 'shape'],
+  print: ['crystal', 'polyhedron', 'recipe', 'shape', 'rods'],
   files: ['print'],
-  draw: ['crystal', 'polyhedron', 'recipe', 'habit'],
+  draw: ['crystal', 'polyhedron', 'recipe', 'shape', 'rods'],
   disk: ['recipe'],
-  door: ['crystal', 'polyhedron', 'recipe', 'habit', 'print', 'files', 'draw', 'disk'],
-  cli: ['crystal', 'polyhedron', 'recipe', 'habit', 'print', 'files', 'draw', 'disk', 'door'],
+  door: ['crystal', 'polyhedron', 'recipe', 'shape', 'rods', 'print', 'files', 'draw', 'disk'],
+  cli: ['crystal', 'polyhedron', 'recipe', 'shape', 'rods', 'print', 'files', 'draw', 'disk', 'door'],
 };
 
 /** Rooms, and the one door, that are for Node alone; everything else runs in a browser unchanged. */

@@ -1,4 +1,4 @@
-import type { MeshReport } from '../files/mesh/report.ts';
+import type { MeshReport } from '../files/check/report.ts';
 
 /** What was found in a file, in words. */
 export function checkText(path: string, format: string, found: MeshReport): string {
@@ -9,8 +9,18 @@ export function checkText(path: string, format: string, found: MeshReport): stri
     `${path}: ${found.ok ? 'sound' : 'NOT sound'} (${format} STL, ${found.triangles} triangles, ${bodies})`,
     `  watertight ${found.watertight ? 'yes' : 'no'}; volume ${short(found.volume)} mm³, surface ${short(found.area)} mm², extents ${size} mm`,
     ...found.problems.map(({ message }) => `  ${message}`),
+    ...moreOpenEdges(found),
   ];
   return lines.join('\n');
 }
 
 const short = (value: number): string => String(Number(value.toFixed(3)));
+
+/** The first open edges by the coordinates of their ends, beyond the one that the message names. */
+function moreOpenEdges({ openEdges }: MeshReport): string[] {
+  if (openEdges.first.length < 2) return [];
+  const places = openEdges.first.map(({ points }) =>
+    points.map((point) => `(${point.map(short).join(', ')})`).join(' to '),
+  );
+  return [`  open edges: ${places.join('; ')}${openEdges.count > places.length ? '; …' : ''}`];
+}

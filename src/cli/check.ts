@@ -1,5 +1,5 @@
 import { Command } from 'commander';
-import { EXIT } from './failure.ts';
+import { EXIT, naming, report } from './failure.ts';
 import { json, result } from './say.ts';
 
 /** Larger files are not read into memory: some five million triangles. */
@@ -15,16 +15,22 @@ export function checkCommand(): Command {
       const [{ readInput }, { readStl }, { checkMesh }, { checkText }] = await Promise.all([
         import('../disk/read-input.ts'),
         import('../files/stl/read.ts'),
-        import('../files/mesh/check.ts'),
+        import('../files/check/check.ts'),
         import('./check-text.ts'),
       ]);
       const reports: unknown[] = [];
       for (const path of paths) {
-        const { mesh, format, normals } = readStl(await readInput(path, { limit: LARGEST_STL }));
-        const found = checkMesh(mesh, normals);
-        if (!found.ok) process.exitCode = EXIT.atFault;
-        if (flags.json) reports.push({ file: path, format, ...found });
-        else result(checkText(path, format, found));
+        const name = path === '-' ? 'standard input' : path;
+        try {
+          const { mesh, format, normals } = readStl(await readInput(path, { limit: LARGEST_STL }));
+          const found = checkMesh(mesh, normals);
+          if (!found.ok) process.exitCode = EXIT.atFault;
+          if (flags.json) reports.push({ file: name, format, ...found });
+          else result(checkText(name, format, found));
+        } catch (error) {
+          process.exitCode = await naming(path, () => Promise.reject(error)).catch(report);
+          reports.push({ file: name, ok: false, error: error instanceof Error ? error.message : String(error) });
+        }
       }
       if (flags.json) json(paths.length === 1 ? reports[0] : reports);
     });

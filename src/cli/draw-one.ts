@@ -1,10 +1,10 @@
 import { drawCrystal } from '../draw/crystal.ts';
-import { closedOrThrow } from '../habit/closing.ts';
-import { polyhedron } from '../habit/habit.ts';
-import { planRods } from '../habit/rod-plan.ts';
-import { millimetresPerUnit } from '../habit/scale.ts';
 import { fileStem } from '../make.ts';
 import { USUAL_SIZE } from '../recipe/print-plan.ts';
+import { planRods } from '../rods/plan.ts';
+import { closedOrThrow } from '../shape/closing.ts';
+import { millimetresPerUnit } from '../shape/scale.ts';
+import { polyhedron } from '../shape/shape.ts';
 import { type LookFlags, lookFrom, viewFrom } from './draw-options.ts';
 import { type PrintFlags, printFlags } from './print-flags.ts';
 import { recipeFrom } from './recipe-input.ts';
@@ -15,13 +15,13 @@ export async function drawing(recipe: string, flags: LookFlags & PrintFlags): Pr
   const resolved = await recipeFrom(recipe, printFlags(flags));
   const { crystal, print } = resolved;
   const view = viewFrom(flags.view, crystal);
-  const habit = closedOrThrow(polyhedron(crystal));
+  const shape = closedOrThrow(polyhedron(crystal));
   const sized = print.size !== null || print.axes !== null || flags.height === true;
-  const scale = millimetresPerUnit(habit, print.size ?? USUAL_SIZE);
-  const svg = drawCrystal(habit, {
+  const scale = millimetresPerUnit(shape, print.size ?? USUAL_SIZE);
+  const svg = drawCrystal(shape, {
     ...look,
     view,
-    ...(print.axes && { axes: planRods(habit, scale, print.axes) }),
+    ...(print.axes && { axes: planRods(shape, scale, print.axes) }),
     ...(sized && { millimetresPerUnit: scale }),
   });
   return { name: fileStem(resolved), svg };

@@ -1,8 +1,8 @@
 import { PRESET_FOLDER } from '../disk/preset-folder.ts';
 import { contactSheet, type SheetEntry } from '../draw/contact-sheet.ts';
-import { closedOrThrow } from '../habit/closing.ts';
-import { polyhedron } from '../habit/habit.ts';
 import { preset, recipeNames } from '../recipe/shelf.ts';
+import { closedOrThrow } from '../shape/closing.ts';
+import { polyhedron } from '../shape/shape.ts';
 import { type LookFlags, lookFrom, viewFrom } from './draw-options.ts';
 import { UsageError } from './failure.ts';
 import { recipeFrom } from './recipe-input.ts';
@@ -34,7 +34,7 @@ export async function sheet(
 function recipesOf(word: string): string[] {
   if (word === 'all')
     return PRESET_FOLDER.list('minerals').flatMap((name) =>
-      Object.keys(preset(PRESET_FOLDER, 'minerals', name)!.habits).map((habit) => `${name}/${habit}`),
+      Object.keys(preset(PRESET_FOLDER, 'minerals', name)!.habits).map((shape) => `${name}/${shape}`),
     );
   const set = preset(PRESET_FOLDER, 'sets', word);
   return set ? recipeNames(set).map((key) => `${word}/${key}`) : [word];
@@ -43,11 +43,11 @@ function recipesOf(word: string): string[] {
 /** Minerals are captioned by name and habit, crystals of a set by the form they show, others by their title. */
 async function entry(recipe: string): Promise<SheetEntry> {
   const { crystal } = await recipeFrom(recipe);
-  const habit = closedOrThrow(polyhedron(crystal));
+  const shape = closedOrThrow(polyhedron(crystal));
   const { mineral, title, forms } = crystal;
-  if (mineral) return { habit, caption: mineral.name, subcaption: mineral.habit };
+  if (mineral?.habit) return { shape, caption: mineral.name, subcaption: mineral.habit };
   const isOfSet = PRESET_FOLDER.list('sets').includes(recipe.split('/')[0]!);
-  return { habit, caption: isOfSet ? capital(forms[0]!.form.name) : title };
+  return { shape, caption: isOfSet ? capital(forms[0]!.form.name) : title };
 }
 
 const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

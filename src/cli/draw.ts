@@ -1,5 +1,6 @@
 import { Command } from 'commander';
-import { remark, result } from './say.ts';
+import { UsageError } from './failure.ts';
+import { result } from './say.ts';
 
 interface DrawFlags {
   out?: string;
@@ -50,27 +51,43 @@ async function draw(recipes: string[], flags: DrawFlags): Promise<void> {
     import('../disk/write-files.ts'),
     import('node:path'),
   ]);
-  if (recipes.length === 0 && !flags.key) {
-    const { UsageError } = await import('./failure.ts');
-    throw new UsageError('draw needs a recipe, for instance: goniolith draw quartz');
-  }
+  refuseMixtures(recipes, flags);
   const drawEach = (): Promise<{ name: string; svg: string }[]> =>
     Promise.all(recipes.map((recipe) => drawing(recipe, flags)));
   const pictures = flags.key ? [await keyPicture()] : flags.sheet ? [await sheet(recipes, flags)] : await drawEach();
   if (flags.out === '-') return result(pictures.map(({ svg }) => svg).join('\n'));
-  if (flags.out !== undefined && pictures.length > 1) {
-    const { UsageError } = await import('./failure.ts');
-    throw new UsageError('--out takes one drawing; draw several with --sheet, or without --out.');
-  }
   for (const { name, svg } of pictures) {
     const file = flags.out ?? path.join('out', `${name}.svg`);
     await writeFiles(path.dirname(file), [{ name: path.basename(file), bytes: new TextEncoder().encode(svg) }]);
     result(file);
   }
-  return remark(`  ${pictures.length === 1 ? 'One drawing' : `${pictures.length} drawings`}, orthographic.`);
+  return undefined;
 }
 
 async function keyPicture(): Promise<{ name: string; svg: string }> {
   const { axisKey } = await import('../draw/axis-key.ts');
   return { name: 'axis-key', svg: axisKey() };
+}
+
+/** Options that would say nothing to this drawing are refused rather than passed over. */
+function refuseMixtures(recipes: readonly string[], flags: DrawFlags): void {
+  const refuse = (message: string): never => {
+    throw new UsageError(message);
+  };
+  if (flags.key && recipes.length > 0) refuse('--key draws the key alone; leave out the recipe.');
+  if (recipes.length === 0 && !flags.key) refuse('draw needs a recipe, for instance: goniolith draw quartz');
+  if (flags.out !== undefined && flags.out !== '-' && !/\.svg$/i.test(flags.out))
+    refuse('drawings are SVG: let --out end in .svg');
+  if (flags.sheet) {
+    const idle = (['labels', 'axes', 'size', 'height', 'bare'] as const).filter(
+      (name) => flags[name] !== undefined && flags[name] !== 'none',
+    );
+    if (idle.length > 0) refuse(`a contact sheet has no ${idle.map((name) => `--${name}`).join(', ')}.`);
+    return;
+  }
+  if (flags.columns !== undefined) refuse('--columns goes with --sheet.');
+  if (recipes.some((recipe) => recipe === 'all' || /^\d+-(groups|forms)$/.test(recipe)))
+    refuse('"all" and whole sets go with --sheet.');
+  if (flags.out !== undefined && recipes.length > 1)
+    refuse('--out takes one drawing; draw several with --sheet, or without --out.');
 }

@@ -26,10 +26,22 @@ export function report(error: unknown): number {
   }
   const hint = 'hint' in error && typeof error.hint === 'string' ? `\n  ${sentence(error.hint)}` : '';
   process.stderr.write(`goniolith: ${sentence(error.message, false)}${hint}\n`);
-  return error instanceof UsageError ? EXIT.wrongUse : EXIT.atFault;
+  const wrongUse = error instanceof UsageError || ('isElsewhere' in error && error.isElsewhere === true);
+  return wrongUse ? EXIT.wrongUse : EXIT.atFault;
 }
 
 function sentence(text: string, capital = true): string {
   const ended = /[.?!)]$|\s{2}/.test(text) ? text : `${text}.`;
   return capital ? ended.charAt(0).toUpperCase() + ended.slice(1) : ended;
+}
+
+/** Runs a step and names what it was about in the errors that do not say it themselves. */
+export async function naming<T>(what: string, step: () => Promise<T> | T): Promise<T> {
+  try {
+    return await step();
+  } catch (error) {
+    if (error instanceof Error && (error.name === 'ObjectError' || error.name === 'FileError'))
+      error.message = `${what === '-' ? 'standard input' : what}: ${error.message}`;
+    throw error;
+  }
 }

@@ -1,7 +1,6 @@
 import { printFace, printZone } from '../crystal/indices.ts';
 import type { PointGroup } from '../crystal/point-group.ts';
 import { miller, zone } from '../crystal/spaces.ts';
-import { printSymbol } from '../crystal/symbol.ts';
 import type { Inspection } from '../inspect.ts';
 import { groupText } from './group-text.ts';
 import { table } from './say.ts';
@@ -10,9 +9,9 @@ import { table } from './say.ts';
 export function inspectionText(known: Inspection, group: PointGroup): string {
   const { cell, mineral } = known;
   const head = [
-    mineral ? `${mineral.name}  ${mineral.formula}  (${mineral.habit})` : known.title,
+    mineral ? `${mineral.name}  ${mineral.formula}  (${mineral.habit ?? 'own forms'})` : known.title,
     `cell  a ${cell.a}  b ${cell.b}  c ${cell.c} Å   α ${cell.alpha}  β ${cell.beta}  γ ${cell.gamma}°`,
-    ...(mineral ? [`cell from  ${mineral.source}`] : []),
+    ...(mineral?.source ? [`cell from  ${mineral.source}`] : []),
   ];
   return [head.join('\n'), groupText(group, false), formsText(known, group), solidText(known, group)].join('\n\n');
 }
@@ -56,8 +55,5 @@ function solidText(known: Inspection, group: PointGroup): string {
   ];
   return lines.join('\n');
 }
-
-export const groupLine = (group: PointGroup): string =>
-  `point group  ${printSymbol(group.hermannMauguin)}  ${group.schoenflies}`;
 
 const short = (value: number, places: number): string => String(Number(value.toFixed(places)));

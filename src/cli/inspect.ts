@@ -14,7 +14,7 @@ export function inspectCommand(): Command {
     .action(async (recipe: string, flags: { size?: string; json?: true }) => {
       const [{ recipeFrom }, { polyhedron }, { inspection }] = await Promise.all([
         import('./recipe-input.ts'),
-        import('../habit/habit.ts'),
+        import('../shape/shape.ts'),
         import('../inspect.ts'),
       ]);
       const resolved = await recipeFrom(recipe, flags.size === undefined ? {} : { size: flags.size });

@@ -1,13 +1,15 @@
 import { join } from 'node:path';
 import { printFace } from '../crystal/indices.ts';
 import { printSymbol } from '../crystal/symbol.ts';
-import { shownForms, vanishesAt } from '../habit/presence.ts';
 import type { Made } from '../make.ts';
+import { extentsOf } from '../print/mesh.ts';
+import { assemble } from '../print/part.ts';
 import type { Resolved } from '../recipe/crystal.ts';
+import { shownForms, vanishesAt } from '../shape/presence.ts';
 
 /** What was made, as words and as data. */
 export function makeReport({ crystal }: Resolved, made: Made, folder: string) {
-  const { measures, solid } = made.habit;
+  const { measures, solid } = made.shape;
   const scale = made.millimetresPerUnit;
   const extents = [0, 1, 2].map((axis) => round((measures.high[axis]! - measures.low[axis]!) * scale, 2));
   const volume = round((measures.volume * scale ** 3) / 1000, 2);
@@ -31,25 +33,34 @@ export function makeReport({ crystal }: Resolved, made: Made, folder: string) {
     .filter(({ appears }) => appears)
     .map(({ letter, symbol, name }) => `${letter ? `${letter} ` : ''}${symbol} ${name}`);
   const group = printSymbol(crystal.group.hermannMauguin);
+  const whole = extentsOf(assemble(made.parts)).map((extent) => round(extent, 2));
+  const withRods = whole.some((extent, i) => extent > extents[i]! + 0.01) ? `, with rods ${whole.join(' × ')} mm` : '';
   return {
     title: crystal.title,
     pointGroup: crystal.group.hermannMauguin,
+    cell: crystal.cell,
     forms,
-    millimetresPerUnit: scale,
-    extents,
-    volumeCubicCentimetres: volume,
     faces: measures.faces.length,
-    files: made.files.map(({ name, holds, bytes, check }) => ({
+    millimetresPerUnit: scale,
+    /** Of the crystal alone, and of the whole object, millimetres. */
+    extents,
+    wholeExtents: whole,
+    /** Of the crystal alone, mm³. */
+    volume: measures.volume * scale ** 3,
+    files: made.files.map(({ name, holds, bytes, check }, i) => ({
       path: join(folder, name),
       holds,
+      /** How many to print. */
+      copies: i === 0 ? 1 : made.parts[i - 1]!.placed.length,
       bytes: bytes.length,
       triangles: check.triangles,
       bodies: check.bodies.length,
       watertight: check.watertight,
       volume: check.volume,
     })),
+    hasRods: withRods !== '' || made.parts.length > 1,
     remarks: [...made.files.slice(1).map(({ name, holds }) => `${name}: ${holds}.`), ...absent, ...made.remarks],
-    summary: `${crystal.title}: point group ${group}, ${measures.faces.length} faces (${names.join(', ')}); crystal ${extents.join(' × ')} mm, ${volume} cm³; closed, checked.`,
+    summary: `${crystal.title}: point group ${group}, ${measures.faces.length} faces (${names.join(', ')}); crystal ${extents.join(' × ')} mm, ${volume} cm³${withRods}; closed, checked.`,
   };
 }
 

@@ -1,4 +1,5 @@
 import { Command } from 'commander';
+import { naming, UsageError } from './failure.ts';
 import { json, remark, result } from './say.ts';
 
 interface MakeFlags {
@@ -14,10 +15,11 @@ interface MakeFlags {
   json?: true;
 }
 
-/** What every print needs said; see shared handling advice in the README. */
-const CAUTION =
-  'Edges and points are sharp as printed, and rods and caps are small parts: not a toy, not tested for children. ' +
-  'Check with your safety officer and local rules before others handle it.';
+/** What every print needs said. */
+const CAUTION = 'Edges and points are sharp as printed';
+const CAUTION_RODS = ', and rods and caps are small parts';
+const CAUTION_END =
+  ': not a toy, not tested for children. Check with your safety officer and local rules before others handle it.';
 
 export function makeCommand(): Command {
   return new Command('make')
@@ -41,25 +43,30 @@ export function makeCommand(): Command {
 }
 
 async function make(recipes: string[], flags: MakeFlags): Promise<void> {
-  const [{ recipeFrom }, { makeModel }, { writeFiles }, { printFlags }] = await Promise.all([
+  const [{ recipeFrom }, { makeModel }, { writeFiles }, { printFlags }, { makeReport }] = await Promise.all([
     import('./recipe-input.ts'),
     import('../make.ts'),
     import('../disk/write-files.ts'),
     import('./print-flags.ts'),
+    import('./make-report.ts'),
   ]);
-  const reports: unknown[] = [];
+  const print = printFlags(flags);
+  if (flags.name !== undefined && recipes.length > 1) throw new UsageError('--name takes one recipe.');
+  const models = [];
   for (const recipe of recipes) {
-    const resolved = await recipeFrom(recipe, printFlags(flags));
-    const made = await makeModel(resolved);
-    await writeFiles(flags.out, made.files);
-    const { makeReport } = await import('./make-report.ts');
-    const report = makeReport(resolved, made, flags.out);
-    reports.push(report);
-    if (flags.json) continue;
+    const resolved = await recipeFrom(recipe, print);
+    models.push({ resolved, made: await naming(recipe, () => makeModel(resolved)) });
+  }
+  await writeFiles(
+    flags.out,
+    models.flatMap(({ made }) => made.files),
+  );
+  const reports = models.map(({ resolved, made }) => makeReport(resolved, made, flags.out));
+  if (flags.json) return json(recipes.length === 1 ? reports[0] : reports);
+  for (const report of reports) {
     remark(report.summary);
     for (const file of report.files) result(file.path);
     for (const sentence of report.remarks) remark(`  ${sentence}`);
   }
-  if (flags.json) json(recipes.length === 1 ? reports[0] : reports);
-  else remark(`  ${CAUTION}`);
+  return remark(`  ${CAUTION}${reports.some(({ hasRods }) => hasRods) ? CAUTION_RODS : ''}${CAUTION_END}`);
 }

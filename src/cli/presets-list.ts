@@ -12,13 +12,16 @@ interface Listing {
 /** What is on the shelf, or the recipes of one set, or what matches some words. */
 export function listPresets(words: readonly string[]): Listing {
   const [only] = words;
-  const set = words.length === 1 && only ? preset(PRESET_FOLDER, 'sets', only.toLowerCase()) : null;
+  const set = only ? preset(PRESET_FOLDER, 'sets', only.toLowerCase()) : null;
   if (set && only) {
     const rows = recipeNames(set).map((name) => {
       const { pointGroup = '', title = '' } = set.recipes[name]!;
       return [`${only.toLowerCase()}/${name}`, printSymbol(String(pointGroup)), title];
     });
-    return { heads: ['recipe', 'point group', 'title'], rows, note: `${set.name}. ${set.note}` };
+    const wanted = rows.filter((row) =>
+      words.slice(1).every((word) => row.some((cell) => cell.toLowerCase().includes(word.toLowerCase()))),
+    );
+    return { heads: ['recipe', 'point group', 'title'], rows: wanted, note: `${set.name}. ${set.note}` };
   }
   const minerals = PRESET_FOLDER.list('minerals').map(mineralRow);
   const matches = minerals.filter((row) =>

@@ -1,5 +1,5 @@
 import { Command } from 'commander';
-import { json, remark, result, table } from './say.ts';
+import { json, result, table } from './say.ts';
 
 export function presetsCommand(): Command {
   return new Command('presets')
@@ -18,7 +18,7 @@ export function presetsCommand(): Command {
       const { heads, rows, note } = listPresets(words);
       if (flags.json) return json(rows.map((row) => Object.fromEntries(heads.map((head, i) => [head, row[i]]))));
       result(rows.length ? table(heads, rows) : 'Nothing on the shelf matches.');
-      if (note) remark(`\n${note}`);
+      if (note) result(`\n${note}`);
       if (rows.length === 0) process.exitCode = 1;
       return undefined;
     });

@@ -1,3 +1,4 @@
+import { choiceOf } from '../recipe/print-plan.ts';
 import type { RecipeInput } from '../recipe/schema.ts';
 import { UsageError } from './failure.ts';
 
@@ -17,6 +18,8 @@ export interface PrintFlags {
 /** Flags as the part of a recipe that they stand for. @throws UsageError where they do not go together */
 export function printFlags(flags: PrintFlags): PrintInput {
   const axes = axesFrom(flags);
+  if (flags.name !== undefined && /\.(stl|svg|3mf)$/i.test(flags.name))
+    throw new UsageError(`--name takes no ending: ${flags.name.replace(/\.\w+$/, '')}.`);
   return {
     ...(flags.size !== undefined && { size: flags.size }),
     ...(axes !== undefined && { axes }),
@@ -38,14 +41,5 @@ function axesFrom({ axes, rods, rodDiameter, reach }: PrintFlags): PrintInput['a
     if (Object.keys(more).length > 0) throw new UsageError('--rods, --rod-diameter and --reach go with --axes.');
     return undefined;
   }
-  return { ...chosen(axes), ...more };
-}
-
-/** "all", "3,2", "-4", "[001],[110]", "c". */
-function chosen(which: string | true): { orders?: number[]; directions?: string[] } {
-  if (which === true || which.trim() === 'all') return {};
-  const words = which.match(/\[[^\]]*\]|[^\s,]+/g) ?? [];
-  const orders = words.filter((word) => /^[-−]?\d$/u.test(word)).map((word) => Number(word.replace('−', '-')));
-  const directions = words.filter((word) => !/^[-−]?\d$/u.test(word));
-  return { ...(orders.length > 0 && { orders }), ...(directions.length > 0 && { directions }) };
+  return Object.keys(more).length === 0 ? (axes === true ? 'all' : axes) : { ...choiceOf(axes), ...more };
 }

@@ -38,7 +38,9 @@ Examples:
   ])
     goniolith.addCommand(command());
   const settle = (command: Command): void => {
-    command.exitOverride();
+    command.exitOverride().configureOutput({
+      outputError: (text, write) => write(text.replace(/^error: /, 'goniolith: ')),
+    });
     for (const verb of command.commands) settle(verb);
   };
   settle(goniolith);
@@ -51,18 +53,28 @@ export async function runCommandLine(words: readonly string[]): Promise<void> {
   try {
     await program().parseAsync(shielded(words), { from: 'user' });
   } catch (error) {
+    if (error instanceof CommanderError && error.code === 'commander.unknownCommand') await suggestMake(words[0]!);
     if (error instanceof CommanderError) process.exitCode = error.exitCode === 0 ? EXIT.done : EXIT.wrongUse;
     else process.exitCode = report(error);
   }
 }
 
-/** Symbols such as -43m and choices such as --axes -4 look like options; this keeps them what they are. */
+const IS_AXES = /^(all|[-−]?\d(\/m)?([\s,]+[-−]?\d(\/m)?)*|\[.*|[abc](,.*)?)$/iu;
+
+/**
+ * Symbols such as -43m and choices such as --axes -4 look like options, and a recipe after a bare --axes looks like its
+ * value; this keeps each what it is.
+ */
 function shielded(words: readonly string[]): string[] {
-  const joined = words.flatMap((word, i) => {
-    const next = words[i + 1];
-    if ((word === '--axes' || word === '-a') && next !== undefined && /^-\d/.test(next)) return [`--axes=${next}`];
-    return i > 0 && /^(--axes|-a)$/.test(words[i - 1]!) && /^-\d/.test(word) ? [] : [word];
-  });
+  const joined: string[] = [];
+  for (let i = 0; i < words.length; i++) {
+    const [word, next] = [words[i]!, words[i + 1]];
+    if (word !== '--axes' && word !== '-a') joined.push(word);
+    else if (next !== undefined && IS_AXES.test(next)) {
+      joined.push(`--axes=${next}`);
+      i += 1;
+    } else joined.push('--axes=all');
+  }
   if (joined[0] !== 'group') return joined;
   const symbols = joined.filter((word) => /^-\d/.test(word));
   return symbols.length === 0 ? joined : [...joined.filter((word) => !symbols.includes(word)), '--', ...symbols];
@@ -82,6 +94,14 @@ function cleanUpOnSignals(): void {
     });
   process.stdout.on('error', (error: NodeJS.ErrnoException) => {
     if (error.code === 'EPIPE') process.exit(EXIT.done);
-    throw error;
+    process.stderr.write(`goniolith: standard output takes no more (${error.code}).\n`);
+    process.exit(EXIT.atFault);
   });
+}
+
+/** `goniolith quartz` most likely means `goniolith make quartz`. */
+async function suggestMake(word: string): Promise<void> {
+  const { PRESET_FOLDER } = await import('../disk/preset-folder.ts');
+  if (PRESET_FOLDER.list('minerals').includes(word.split('/')[0]!.toLowerCase()))
+    process.stderr.write(`  To make it: goniolith make ${word}\n`);
 }

@@ -2,6 +2,7 @@ import { existsSync } from 'node:fs';
 import { basename } from 'node:path';
 import { PRESET_FOLDER } from '../disk/preset-folder.ts';
 import { decodeText, readInput } from '../disk/read-input.ts';
+import { slug } from '../make.ts';
 import type { Resolved } from '../recipe/crystal.ts';
 import type { Origin } from '../recipe/problem.ts';
 import { resolve } from '../recipe/resolve.ts';
@@ -30,27 +31,32 @@ function isFile(argument: string): boolean {
 
 async function fromFile(argument: string): Promise<Written> {
   const name = argument === '-' ? 'standard input' : argument;
-  const text = decodeText(await readInput(argument, { limit: LARGEST_RECIPE }), name);
-  const written = readText(text, name);
+  const written = readText(decodeText(await readInput(argument, { limit: LARGEST_RECIPE }), name), name);
   return argument === '-' ? written : named(written, basename(argument).replace(/\.\w+$/, ''));
 }
 
-/** A recipe without a title takes its file's name. */
-function named(written: Written, title: string): Written {
-  const { value } = written;
-  const plain = typeof value === 'object' && value !== null && !Array.isArray(value);
-  return plain && !('title' in value) && !('mineral' in value) ? { ...written, value: { title, ...value } } : written;
+/** A recipe in a file gives its models the file's name, unless it says another. */
+function named({ value, origin }: Written, stem: string): Written {
+  if (!isRecord(value)) return { value, origin };
+  const print = isRecord(value.print) ? value.print : {};
+  if (!(value.print === undefined || isRecord(value.print))) return { value, origin };
+  const title = value.title === undefined && value.mineral === undefined ? { title: stem } : {};
+  return { value: { ...title, ...value, print: { file: slug(stem), ...print } }, origin };
 }
 
-/** Flags win over the recipe. What they say has no place in the recipe's text, so problems name the flag's key only. */
+/** Flags win over the recipe, and problems with them name the flag. */
 function withFlags({ value, origin }: Written, flags: NonNullable<RecipeInput['print']>): Written {
-  if (typeof value !== 'object' || value === null || Array.isArray(value)) return { value, origin };
-  const own = 'print' in value && typeof value.print === 'object' && value.print !== null ? value.print : {};
-  const fromFlags = (key: string | number | undefined): boolean =>
-    key !== undefined && String(key).replace('?', '') in flags;
-  const placed: Origin = {
-    ...origin,
-    place: (path) => (path[0] === 'print' && fromFlags(path[1]) ? undefined : origin.place?.(path)),
+  if (!isRecord(value)) return { value, origin };
+  const print = isRecord(value.print) ? value.print : {};
+  const elsewhere: Origin['elsewhere'] = ([first, key]) => {
+    const flag = String(key).replace('?', '');
+    return first === 'print' && flag in flags ? (FLAGS[flag] ?? `--${flag}`) : undefined;
   };
-  return { value: { ...value, print: { ...own, ...flags } }, origin: placed };
+  return { value: { ...value, print: { ...print, ...flags } }, origin: { ...origin, elsewhere } };
 }
+
+/** Keys of `print` whose flag is called otherwise. */
+const FLAGS: Readonly<Record<string, string>> = { file: '--name', stl: '--text' };
+
+const isRecord = (value: unknown): value is Record<string, unknown> =>
+  typeof value === 'object' && value !== null && !Array.isArray(value);

@@ -6,7 +6,12 @@ export function schemaCommand(): Command {
     .description('Print the JSON Schema of recipes, for editors that complete and check YAML.')
     .addHelpText('after', '\nExample:\n  goniolith schema > goniolith-recipe.schema.json')
     .action(async () => {
-      const { recipeJsonSchema } = await import('../recipe/schema.ts');
-      json(recipeJsonSchema());
+      const [{ recipeJsonSchema }, { PRESET_FOLDER }, { SETTINGS }] = await Promise.all([
+        import('../recipe/schema.ts'),
+        import('../disk/preset-folder.ts'),
+        import('../crystal/setting.ts'),
+      ]);
+      const [minerals, printers] = [PRESET_FOLDER.list('minerals'), PRESET_FOLDER.list('printers')];
+      json(recipeJsonSchema({ minerals, printers, pointGroups: SETTINGS.map(({ key }) => key) }));
     });
 }

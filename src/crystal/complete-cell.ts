@@ -37,6 +37,8 @@ const RULES: Readonly<Record<Axes, CellRule>> = {
 };
 
 const GREEK: Readonly<Record<Edge | Angle, string>> = { a: 'a', b: 'b', c: 'c', alpha: 'α', beta: 'β', gamma: 'γ' };
+/** Ångström; axial ratios, with one edge 1, lie within as well. */
+const LENGTHS = { least: 0.001, most: 100_000 };
 const EDGES: readonly Edge[] = ['a', 'b', 'c'];
 const ANGLES: readonly Angle[] = ['alpha', 'beta', 'gamma'];
 
@@ -64,8 +66,9 @@ const differ = (p: number, q: number): boolean => Math.abs(p - q) > CELL_TOLERAN
 function checkValues(given: Partial<Cell>): void {
   for (const edge of EDGES) {
     const length = given[edge];
-    if (length === undefined || (Number.isFinite(length) && length > 0)) continue;
-    throw new CrystalError('cell-length', `the cell edge ${edge} must be a length above zero, not ${length}`);
+    if (length === undefined || (length >= LENGTHS.least && length <= LENGTHS.most)) continue;
+    const range = `between ${LENGTHS.least} and ${LENGTHS.most} Å`;
+    throw new CrystalError('cell-length', `the cell edge ${edge} must be a length ${range}, not ${length}`);
   }
   for (const angle of ANGLES) {
     const degrees = given[angle];

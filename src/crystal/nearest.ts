@@ -1,5 +1,5 @@
 /** Number of single characters to insert, delete or replace to turn one word into another (Levenshtein 1966). */
-export function editDistance(from: string, to: string): number {
+function editDistance(from: string, to: string): number {
   let previous = Array.from({ length: to.length + 1 }, (_, j) => j);
   for (let i = 1; i <= from.length; i++) {
     const current = [i];
@@ -12,10 +12,14 @@ export function editDistance(from: string, to: string): number {
   return previous[to.length] ?? 0;
 }
 
-/** The candidates at the smallest edit distance from the word, in their own order, at most `limit` of them. */
+/**
+ * The candidates at the smallest edit distance from the word, in their own order, at most `limit` of them; none when
+ * even the nearest shares too little with it to be what was meant.
+ */
 export function nearest(word: string, candidates: Iterable<string>, limit = 4): string[] {
   const measured = [...candidates].map((candidate) => ({ candidate, distance: editDistance(word, candidate) }));
   const best = Math.min(...measured.map(({ distance }) => distance));
+  if (best > Math.max(2, Math.floor(word.length / 3))) return [];
   return measured
     .filter(({ distance }) => distance === best)
     .slice(0, limit)

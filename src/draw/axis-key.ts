@@ -1,5 +1,5 @@
 import { printSymbol } from '../crystal/symbol.ts';
-import { AXIS_SYMBOLS, isRotoinversion, type Outline, orderOf, type RodSymbol } from '../habit/axis-symbol.ts';
+import { AXIS_SYMBOLS, isRotoinversion, type Outline, orderOf, type RodSymbol } from '../rods/axis-symbol.ts';
 import { FAINT, INK, PAPER } from './palette.ts';
 import { closedPath, element, svgPage } from './svg.ts';
 import { layOutSymbol, symbolText, words } from './symbol-text.ts';

@@ -1,6 +1,6 @@
 import { OVERBAR } from '../crystal/marks.ts';
 import { printSymbol } from '../crystal/symbol.ts';
-import type { ClosedHabit } from '../habit/habit.ts';
+import type { ClosedShape } from '../shape/shape.ts';
 import { figure, type LineWeights } from './figure.ts';
 import { FAINT, PAPER, RULE } from './palette.ts';
 import { fitInto } from './project.ts';
@@ -10,7 +10,7 @@ import type { Point } from './vector.ts';
 import type { View } from './view.ts';
 
 export interface SheetEntry {
-  readonly habit: ClosedHabit;
+  readonly shape: ClosedShape;
   readonly caption: string;
   /** A further line; digits with U+0305 after them get drawn overbars. */
   readonly subcaption?: string;
@@ -88,17 +88,17 @@ interface Layout extends SheetOptions {
   readonly captionSize: number;
 }
 
-function cell({ habit, caption, subcaption }: SheetEntry, [x, y]: Point, options: Layout): string {
+function cell({ shape, caption, subcaption }: SheetEntry, [x, y]: Point, options: Layout): string {
   const { view = 'general', style = 'tinted', hidden = 'none' } = options;
   const inset = (CELL - BOX) / 2;
-  const picture = figure(habit, { view, style, hidden, labels: 'none', weights: WEIGHTS, rods: null });
+  const picture = figure(shape, { view, style, hidden, labels: 'none', weights: WEIGHTS, rods: null });
   const placement = fitInto(picture.bounds, { x: x + inset, y: y + inset, width: BOX, height: BOX });
   const middle = x + CELL / 2;
   const under = y + inset + BOX + LINE + 6;
   return [
     picture.paint(placement),
     words(caption, { at: [middle, under], size: sizeFor(caption, options.captionSize), anchor: 'middle' }),
-    line(printSymbol(habit.crystal.group.hermannMauguin), [middle, under + LINE]),
+    line(printSymbol(shape.crystal.group.hermannMauguin), [middle, under + LINE]),
     subcaption ? line(subcaption, [middle, under + 2 * LINE]) : '',
   ].join('\n');
 }

@@ -1,7 +1,7 @@
 import { printSymbol } from '../crystal/symbol.ts';
-import type { ClosedHabit } from '../habit/habit.ts';
-import { millimetresPerUnit as unitFor } from '../habit/scale.ts';
 import { USUAL_SIZE } from '../recipe/print-plan.ts';
+import { millimetresPerUnit as unitFor } from '../shape/scale.ts';
+import type { ClosedShape } from '../shape/shape.ts';
 import { type Figure, type FigureOptions, figure, type LineWeights } from './figure.ts';
 import { legend } from './legend.ts';
 import { FAINT, PAPER } from './palette.ts';
@@ -54,10 +54,10 @@ const WEIGHTS: LineWeights = { outline: 2.4, inner: 1.5, hidden: 0.9 };
  * The same crystal and options give the same text.
  * @throws RangeError for a height without a size, a size or width that is not positive, or a view that is no direction
  */
-export function drawCrystal(habit: ClosedHabit, options: DrawOptions = {}): string {
+export function drawCrystal(shape: ClosedShape, options: DrawOptions = {}): string {
   const { width = USUAL_WIDTH, ground = 'paper', style = 'tinted' } = options;
   check(options, width);
-  const picture = figure(habit, figureOptions(habit, options));
+  const picture = figure(shape, figureOptions(shape, options));
   const left = MARGIN + (options.height ? HEIGHT_COLUMN : 0);
   const top = options.title === false ? MARGIN : HEADER + GAP;
   const room = { width: width - left - MARGIN, height: 0.85 * width };
@@ -66,19 +66,19 @@ export function drawCrystal(habit: ClosedHabit, options: DrawOptions = {}): stri
   const placement = fitInto(picture.bounds, { x: left, y: top, width: room.width, height });
 
   const bar = options.millimetresPerUnit !== undefined && options.scaleBar !== false;
-  const forms = options.legend === false ? null : legend(habit, width - 2 * MARGIN, style);
+  const forms = options.legend === false ? null : legend(shape, width - 2 * MARGIN, style);
   const underPicture = top + height + (bar ? BAR_STRIP : 0);
   const bottom = forms ? underPicture + GAP + forms.height : underPicture;
   const page = {
     width,
     height: Math.round(bottom + MARGIN),
-    title: spokenTitle(habit),
+    title: spokenTitle(shape),
     ground: ground === 'paper' ? PAPER : null,
   };
   return svgPage(page, [
-    options.title === false ? '' : heading(habit),
+    options.title === false ? '' : heading(shape),
     picture.paint(placement),
-    options.height ? heightOf(habit, picture, placement, options.millimetresPerUnit!) : '',
+    options.height ? heightOf(shape, picture, placement, options.millimetresPerUnit!) : '',
     bar
       ? scaleBar(
           [width - MARGIN, top + height + BAR_STRIP - 10],
@@ -99,18 +99,18 @@ function check({ height, millimetresPerUnit }: DrawOptions, width: number): void
     throw new RangeError(`millimetresPerUnit is ${millimetresPerUnit}; it must be a positive number.`);
 }
 
-function figureOptions(habit: ClosedHabit, options: DrawOptions): FigureOptions {
+function figureOptions(shape: ClosedShape, options: DrawOptions): FigureOptions {
   const { view = 'general', style = 'tinted', hidden = 'thin', labels = 'none', axes } = options;
-  const millimetresPerUnit = options.millimetresPerUnit ?? unitFor(habit, USUAL_SIZE);
+  const millimetresPerUnit = options.millimetresPerUnit ?? unitFor(shape, USUAL_SIZE);
   return { view, style, hidden, labels, weights: WEIGHTS, rods: axes ? { laid: axes, millimetresPerUnit } : null };
 }
 
 /** The name, and under it the point group with overbars and what is known besides. */
-function heading({ crystal }: ClosedHabit): string {
+function heading({ crystal }: ClosedShape): string {
   const { mineral, group } = crystal;
   const symbol = layOutSymbol(printSymbol(group.hermannMauguin));
   const name = nameOf(crystal);
-  const rest = mineral ? [mineral.habit, subscripts(mineral.formula)] : [group.system];
+  const rest = mineral ? [...(mineral.habit ? [mineral.habit] : []), subscripts(mineral.formula)] : [group.system];
   const under = { at: [MARGIN, HEADER] as const, size: 17, fill: FAINT };
   if (name === null) {
     return symbolText(symbol, { start: [MARGIN, 52], size: 27 }) + words(rest.join(' · '), under);
@@ -124,12 +124,12 @@ function heading({ crystal }: ClosedHabit): string {
 }
 
 /** Null for a crystal that is known by its point group only. */
-function nameOf({ title, mineral, group }: ClosedHabit['crystal']): string | null {
+function nameOf({ title, mineral, group }: ClosedShape['crystal']): string | null {
   if (mineral && title === `${mineral.name}, ${mineral.habit}`) return mineral.name;
   return title === `Crystal of point group ${group.hermannMauguin}` ? null : title;
 }
 
-const spokenTitle = ({ crystal: { title, group } }: ClosedHabit): string =>
+const spokenTitle = ({ crystal: { title, group } }: ClosedShape): string =>
   `${title}, point group ${group.hermannMauguin}`;
 
 /** Figures after a chemical symbol or a bracket go below the line. */
@@ -140,7 +140,7 @@ const subscripts = (formula: string): string =>
 
 /** The height along c, at the crystal's left; it is as much foreshortened as c is. */
 function heightOf(
-  { measures }: ClosedHabit,
+  { measures }: ClosedShape,
   { frame, bounds }: Figure,
   placement: Placement,
   millimetresPerUnit: number,

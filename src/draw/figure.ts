@@ -1,6 +1,6 @@
-import { facePlanes } from '../habit/face-planes.ts';
-import type { ClosedHabit } from '../habit/habit.ts';
 import { faceCorners } from '../polyhedron/measures.ts';
+import { facePlanes } from '../shape/face-planes.ts';
+import type { ClosedShape } from '../shape/shape.ts';
 import { faceLabels, type LabelKind, labelText } from './labels.ts';
 import { INK, PAPER, shaded, tintOf } from './palette.ts';
 import { type Bounds, boundsOf, hull, type Placement, place, projectAll } from './project.ts';
@@ -40,11 +40,11 @@ export interface Figure {
 /** To the light, in the directions of the page: from the upper left, and from the front. */
 const LIGHT: Vector = unit([-0.45, 0.6, 0.75]);
 
-export function figure(habit: ClosedHabit, options: FigureOptions): Figure {
-  const frame = viewFrame(options.view, habit.crystal.metric);
-  const sight = look(habit, frame.toward);
-  const vertices = projectAll(frame, habit.measures.positions);
-  const rods = piecesInUnits(habit, options.rods, frame);
+export function figure(shape: ClosedShape, options: FigureOptions): Figure {
+  const frame = viewFrame(options.view, shape.crystal.metric);
+  const sight = look(shape, frame.toward);
+  const vertices = projectAll(frame, shape.measures.positions);
+  const rods = piecesInUnits(shape, options.rods, frame);
   return {
     bounds: boundsOf([...vertices, ...rods.flatMap(({ outline }) => outline)]),
     frame,
@@ -54,19 +54,19 @@ export function figure(habit: ClosedHabit, options: FigureOptions): Figure {
       const before = placed.filter(({ layer }) => layer === 'before');
       return [
         ...placed.filter(({ layer }) => layer === 'behind').map(rodPath),
-        ...paintFaces(habit, sight, frame, at, options),
+        ...paintFaces(shape, sight, frame, at, options),
         ...paintEdges(sight, at, options),
-        ...paintLabels(habit, sight, frame, at, before, options),
+        ...paintLabels(shape, sight, frame, at, before, options),
         ...before.map(rodPath),
       ].join('\n');
     },
   };
 }
 
-function piecesInUnits(habit: ClosedHabit, rods: FigureOptions['rods'], frame: ViewFrame): RodPiece[] {
+function piecesInUnits(shape: ClosedShape, rods: FigureOptions['rods'], frame: ViewFrame): RodPiece[] {
   if (!rods) return [];
   const unitsPerMillimetre = 1 / rods.millimetresPerUnit;
-  return rodPieces(rods.laid, facePlanes(habit, rods.millimetresPerUnit), frame).map((piece) =>
+  return rodPieces(rods.laid, facePlanes(shape, rods.millimetresPerUnit), frame).map((piece) =>
     moved(piece, ([x, y]) => [x * unitsPerMillimetre, y * unitsPerMillimetre]),
   );
 }
@@ -77,10 +77,10 @@ const moved = (piece: RodPiece, by: (point: Point) => Point): RodPiece => ({
   rims: piece.rims.map((rim) => rim.map(by)),
 });
 
-const outlineOf = ({ solid }: ClosedHabit, face: number, at: readonly Point[]): Point[] =>
+const outlineOf = ({ solid }: ClosedShape, face: number, at: readonly Point[]): Point[] =>
   faceCorners(solid, face).map((vertex) => at[vertex]!);
 
-function colourOf({ solid, measures }: ClosedHabit, face: number, frame: ViewFrame, style: FigureOptions['style']) {
+function colourOf({ solid, measures }: ClosedShape, face: number, frame: ViewFrame, style: FigureOptions['style']) {
   if (style === 'lines') return PAPER;
   const normal = vectorAt(measures.normals, face);
   const seen: Vector = [dot(frame.right, normal), dot(frame.up, normal), dot(frame.toward, normal)];
@@ -89,14 +89,14 @@ function colourOf({ solid, measures }: ClosedHabit, face: number, frame: ViewFra
 
 /** Faces of a convex body do not overlap, so their order does not matter. */
 function paintFaces(
-  habit: ClosedHabit,
+  shape: ClosedShape,
   { front }: Sight,
   frame: ViewFrame,
   at: readonly Point[],
   { style }: FigureOptions,
 ): string[] {
   return front.map((face) =>
-    element('path', { d: closedPath(outlineOf(habit, face, at)), fill: colourOf(habit, face, frame, style) }),
+    element('path', { d: closedPath(outlineOf(shape, face, at)), fill: colourOf(shape, face, frame, style) }),
   );
 }
 
@@ -123,7 +123,7 @@ function paintEdges({ edges, silhouette }: Sight, at: readonly Point[], { hidden
 }
 
 function paintLabels(
-  habit: ClosedHabit,
+  shape: ClosedShape,
   { front }: Sight,
   frame: ViewFrame,
   at: readonly Point[],
@@ -131,10 +131,10 @@ function paintLabels(
   { labels, style }: FigureOptions,
 ): string[] {
   if (labels === 'none') return [];
-  const faces = front.map((face) => ({ face, outline: outlineOf(habit, face, at) }));
+  const faces = front.map((face) => ({ face, outline: outlineOf(shape, face, at) }));
   const obstacles = rods.filter(({ kind }) => kind === 'rod' || kind === 'side').map(({ outline }) => hull(outline));
-  return faceLabels(habit, labels, faces, obstacles).map((label) =>
-    labelText(label, colourOf(habit, label.face, frame, style)),
+  return faceLabels(shape, labels, faces, obstacles).map((label) =>
+    labelText(label, colourOf(shape, label.face, frame, style)),
   );
 }
 

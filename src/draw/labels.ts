@@ -1,6 +1,6 @@
 import { printFace } from '../crystal/indices.ts';
 import { miller } from '../crystal/spaces.ts';
-import type { ClosedHabit } from '../habit/habit.ts';
+import type { ClosedShape } from '../shape/shape.ts';
 import { type LabelBox, type LabelPlace, placeLabel } from './fit-label.ts';
 import { layOutSymbol, symbolText, words } from './symbol-text.ts';
 import { type Point, vectorAt } from './vector.ts';
@@ -30,19 +30,19 @@ const MARGIN = 0.22;
 
 /** Finds a place for the label of every face that has room for one. */
 export function faceLabels(
-  habit: ClosedHabit,
+  shape: ClosedShape,
   kind: LabelKind,
   faces: readonly PageFace[],
   obstacles: readonly (readonly Point[])[],
 ): FaceLabel[] {
   return faces.flatMap(({ face, outline }) => {
-    const label = labelOf(habit, kind, face);
+    const label = labelOf(shape, kind, face);
     const spot = placeLabel(outline, label.box, obstacles, TYPE[label.kind]);
     return spot.size < TYPE.smallest ? [] : [{ face, ...label, ...spot }];
   });
 }
 
-function labelOf({ crystal, solid }: ClosedHabit, kind: LabelKind, face: number) {
+function labelOf({ crystal, solid }: ClosedShape, kind: LabelKind, face: number) {
   const letter = crystal.forms[solid.planes.form[face]!]!.letter;
   if (kind === 'letters' && letter !== null) {
     const width = 0.62 * [...letter].length + 2 * MARGIN;

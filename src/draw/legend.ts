@@ -1,6 +1,6 @@
 import { printFace } from '../crystal/indices.ts';
-import type { Habit } from '../habit/habit.ts';
-import { shownForms } from '../habit/presence.ts';
+import { shownForms } from '../shape/presence.ts';
+import type { Shape } from '../shape/shape.ts';
 import { FAINT, INK, tintOf } from './palette.ts';
 import { element } from './svg.ts';
 import { layOutSymbol, symbolText, words } from './symbol-text.ts';
@@ -17,7 +17,7 @@ interface LegendRow {
   readonly tint: string;
 }
 
-function rowsOf({ crystal, solid }: Habit): LegendRow[] {
+function rowsOf({ crystal, solid }: Shape): LegendRow[] {
   const shown = shownForms(solid);
   return crystal.forms.flatMap(({ form, letter }, place) => {
     if (!shown[place]) return [];
@@ -33,8 +33,8 @@ export interface Legend {
 }
 
 /** Names every form that shows: its tint, letter, symbol and traditional name. */
-export function legend(habit: Habit, width: number, style: 'tinted' | 'lines'): Legend {
-  const rows = rowsOf(habit);
+export function legend(shape: Shape, width: number, style: 'tinted' | 'lines'): Legend {
+  const rows = rowsOf(shape);
   const columns = rows.length > COLUMN_LENGTH ? 2 : 1;
   const lines = Math.ceil(rows.length / columns);
   const letters = rows.some(({ letter }) => letter !== null) ? 28 : 0;

@@ -1,6 +1,6 @@
-import { AXIS_SYMBOLS, type Outline } from '../habit/axis-symbol.ts';
-import { exitOf, type FacePlane } from '../habit/face-planes.ts';
-import type { RodEnd, RodPlan } from '../habit/rod-plan.ts';
+import { AXIS_SYMBOLS, type Outline } from '../rods/axis-symbol.ts';
+import type { RodEnd, RodPlan } from '../rods/plan.ts';
+import { exitOf, type FacePlane } from '../shape/face-planes.ts';
 import { hull, project } from './project.ts';
 import { along, cross, dot, type Point, type Vector } from './vector.ts';
 import type { ViewFrame } from './view.ts';

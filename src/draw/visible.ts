@@ -1,5 +1,5 @@
-import type { ClosedHabit } from '../habit/habit.ts';
 import { edges } from '../polyhedron/measures.ts';
+import type { ClosedShape } from '../shape/shape.ts';
 import { dot, type Vector, vectorAt } from './vector.ts';
 
 /** `edge-on`: the face is seen as a line. */
@@ -41,7 +41,7 @@ export interface Sight {
  * normal leans towards the viewer, and not at all otherwise.
  * @param toward unit vector at the viewer, Cartesian
  */
-export function look({ solid, measures }: ClosedHabit, toward: Vector): Sight {
+export function look({ solid, measures }: ClosedShape, toward: Vector): Sight {
   const state = new Map(
     measures.faces.map((plane) => [plane, stateOf(vectorAt(measures.normals, plane), toward)] as const),
   );
@@ -63,7 +63,7 @@ function kindOf(p: FaceState, q: FaceState): EdgeKind {
 }
 
 /** Edges of front faces to any other face follow one another in a single cycle. */
-function silhouetteOf({ solid, front }: { solid: ClosedHabit['solid']; front: ReadonlySet<number> }): number[] {
+function silhouetteOf({ solid, front }: { solid: ClosedShape['solid']; front: ReadonlySet<number> }): number[] {
   const next = new Map<number, number>();
   for (const plane of front) {
     const [first, end] = [solid.start[plane]!, solid.start[plane + 1]!];

@@ -1,8 +1,10 @@
-import { CutFaces } from './cut-faces.ts';
-import { GroupAction } from './group-action.ts';
-import { Joiner } from './join.ts';
-import { PlaneTable } from './plane-table.ts';
-import type { PlaneSet } from './planes.ts';
+import { CutFaces } from './by-form/cut-faces.ts';
+import { GroupAction } from './by-form/group-action.ts';
+import { Joiner } from './by-form/join.ts';
+import { Inserter } from './by-plane/insert.ts';
+import { Reader } from './by-plane/read.ts';
+import { PlaneTable } from './exact/plane-table.ts';
+import type { PlaneSet, PlaneSymmetry } from './planes.ts';
 
 /**
  * The intersection of half-spaces, with its full topology. Face f's edges are `start[f]` … `start[f + 1] − 1`,
@@ -22,28 +24,49 @@ export interface Solid {
 }
 
 /** Where the kernel works. One for all calls: a call neither waits nor calls back, so none can disturb another. */
-const planes = new PlaneTable();
+const table = new PlaneTable();
 const action = new GroupAction();
-const cut = new CutFaces(planes, action);
-const joiner = new Joiner(planes, action, cut);
+const cut = new CutFaces(table, action);
+const joiner = new Joiner(table, action, cut);
+const inserter = new Inserter(table);
+const reader = new Reader(inserter.shell);
 
 /**
- * Intersects half-spaces exactly. One face a form is cut; the planes' symmetry, where given, carries it to the rest.
- * Every decision is the exact sign of a determinant, so any number of planes may meet in a point or an edge.
- * Planes with normals that are not whole numbers are treated at their exact double values; a solid which reaches more
- * than 2^40 times its largest offset then counts as open. Normals and offsets are best kept between 1e-90 and 1e90 in
- * size, within which no product in the filters leaves the range of doubles.
+ * Intersects half-spaces exactly: every decision is the exact sign of a determinant, so any number of planes may meet in
+ * a point or an edge. With a point group one face a form is cut and the group carries it to the rest; without, plane
+ * after plane is put into one solid. Both ways give the same faces, edges and vertices.
+ *
+ * Normals that are not whole numbers are taken at their exact double values; a solid which reaches more than 2^40 times
+ * its largest offset then counts as open. Normals and offsets are best kept between 1e-90 and 1e90 in size, within
+ * which no product in the filters leaves the range of doubles.
  * @throws RangeError for a plane without a normal, or with a number that is not finite
  */
-export function intersect(set: PlaneSet): Solid {
-  planes.load(set);
-  action.load(set);
-  cut.cut();
-  joiner.carry(set);
-  const { start, neighbour } = joiner;
-  const nothing = { planes: set, start, neighbour, corner: new Int32Array(0), vertices: new Float64Array(0) };
-  if (set.form.length === 0 || cut.open) return { state: 'open', ...nothing };
-  if (neighbour.length === 0) return { state: 'empty', ...nothing };
-  joiner.join(set);
-  return { planes: set, state: 'bounded', start, neighbour, corner: joiner.corner, vertices: joiner.vertices };
+export function intersect(planes: PlaneSet): Solid {
+  table.load(planes);
+  return planes.symmetry ? intersectForms(planes, planes.symmetry) : intersectPlanes(planes);
 }
+
+function intersectForms(planes: PlaneSet, symmetry: PlaneSymmetry): Solid {
+  action.load(planes, symmetry);
+  cut.cut();
+  joiner.carry();
+  const { start, neighbour } = joiner;
+  if (planes.form.length === 0 || cut.open) return { planes, state: 'open', start, neighbour, ...noVertices() };
+  if (neighbour.length === 0) return { planes, state: 'empty', start, neighbour, ...noVertices() };
+  joiner.join();
+  return { planes, state: 'bounded', start, neighbour, corner: joiner.corner, vertices: joiner.vertices };
+}
+
+function intersectPlanes(planes: PlaneSet): Solid {
+  if (!inserter.insertAll()) {
+    const start = new Int32Array(planes.form.length + 1);
+    return { planes, state: 'empty', start, neighbour: new Int32Array(0), ...noVertices() };
+  }
+  reader.readFaces();
+  const { start, neighbour, corner } = reader;
+  if (reader.isOpen()) return { planes, state: 'open', start, neighbour, ...noVertices() };
+  reader.readVertices();
+  return { planes, state: 'bounded', start, neighbour, corner, vertices: reader.vertices };
+}
+
+const noVertices = () => ({ corner: new Int32Array(0), vertices: new Float64Array(0) });

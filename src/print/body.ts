@@ -1,8 +1,8 @@
-import type { ClosedHabit } from '../habit/habit.ts';
+import type { ClosedShape } from '../shape/shape.ts';
 import type { Mesh } from './mesh.ts';
 
 /** The crystal itself at true size, its centre at the origin: each face cut into triangles from its first corner. */
-export function crystalMesh({ solid, measures }: ClosedHabit, millimetresPerUnit: number): Mesh {
+export function crystalMesh({ solid, measures }: ClosedShape, millimetresPerUnit: number): Mesh {
   const triangles: number[] = [];
   for (const face of measures.faces) {
     const from = solid.start[face]!;

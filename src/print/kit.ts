@@ -1,5 +1,5 @@
 import load, { type Manifold, type ManifoldToplevel, type Mat4, type Polygons } from 'manifold-3d';
-import type { Mesh } from './mesh.ts';
+import { type Mesh, meshVolume } from './mesh.ts';
 import { withoutShortEdges } from './short-edges.ts';
 
 let loading: Promise<ManifoldToplevel> | undefined;
@@ -77,9 +77,15 @@ export class Workbench {
     const positions = new Float64Array((vertProperties.length / numProp) * 3);
     for (let v = 0; v * 3 < positions.length; v++)
       positions.set(vertProperties.subarray(v * numProp, v * numProp + 3), 3 * v);
-    return withoutShortEdges({ positions, triangles: Uint32Array.from(triVerts) }, SHORTEST_EDGE);
+    const mesh = withoutShortEdges({ positions, triangles: Uint32Array.from(triVerts) }, SHORTEST_EDGE);
+    const off = Math.abs(meshVolume(mesh) / solid.volume() - 1);
+    if (!(off < VOLUME_TOLERANCE)) throw new Error(`A part lost ${off} of its volume while its mesh was tidied.`);
+    return mesh;
   }
 }
+
+/** Relative; single precision and drawn-together edges take far less. */
+const VOLUME_TOLERANCE = 1e-5;
 
 /** Millimetres; far below what any printer resolves. */
 const SHORTEST_EDGE = 0.001;

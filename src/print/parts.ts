@@ -1,11 +1,13 @@
-import type { ClosedHabit } from '../habit/habit.ts';
-import { planRods } from '../habit/rod-plan.ts';
 import type { PrintPlan } from '../recipe/crystal.ts';
+import type { PrinterProfile } from '../recipe/schema.ts';
+import { AXIS_SYMBOLS } from '../rods/axis-symbol.ts';
+import { planRods, type RodPlan } from '../rods/plan.ts';
+import type { ClosedShape } from '../shape/shape.ts';
 import { crystalMesh } from './body.ts';
-import { fuseRods } from './fused-rods.ts';
 import { withSolids } from './kit.ts';
 import { ontoBed, type Part } from './part.ts';
-import { boreForRods } from './separate-rods.ts';
+import { fuseRods } from './rods/fused.ts';
+import { boreForRods } from './rods/separate.ts';
 
 export interface PrintedModel {
   readonly parts: readonly Part[];
@@ -15,20 +17,15 @@ export interface PrintedModel {
 
 /** Makes the printable parts of a crystal at its size. @throws ObjectError */
 export async function printedParts(
-  habit: ClosedHabit,
+  shape: ClosedShape,
   scale: number,
   { axes, printer }: PrintPlan,
 ): Promise<PrintedModel> {
-  const crystal = crystalMesh(habit, scale);
+  const crystal = crystalMesh(shape, scale);
   if (!axes) return { parts: [bodyPart('the crystal', crystal)], remarks: [] };
-  const plan = planRods(habit, scale, axes);
+  const plan = planRods(shape, scale, axes);
   if (plan.ends.length === 0) return { parts: [bodyPart('the crystal', crystal)], remarks: plan.remarks };
-  const thin =
-    axes.diameter < printer.rod.smallest
-      ? [
-          `Rods of ${axes.diameter} mm are thinner than the ${printer.rod.smallest} mm that "${printer.name}" prints reliably.`,
-        ]
-      : [];
+  const thin = thinRods(plan, printer);
   return withSolids((bench) => {
     const body = bench.solid(crystal);
     if (axes.fit === 'fused') {
@@ -45,4 +42,16 @@ export async function printedParts(
 
 function bodyPart(purpose: string, mesh: Part['mesh']): Part {
   return { name: 'body', purpose, mesh: ontoBed([mesh])[0]!, placed: [mesh] };
+}
+
+function thinRods({ ends, diameter, symbolUnit }: RodPlan, { name, rod, wall }: PrinterProfile): string[] {
+  const remarks: string[] = [];
+  if (diameter < rod.smallest)
+    remarks.push(`Rods of ${diameter} mm are thinner than the ${rod.smallest} mm that "${name}" prints reliably.`);
+  const rim = symbolUnit * Math.min(...ends.flat().map(({ line }) => AXIS_SYMBOLS[line.symbol].rim));
+  if (rim < wall)
+    remarks.push(
+      `The rims of the hollow symbols are ${rim.toFixed(2)} mm, thinner than the ${wall} mm that "${name}" prints.`,
+    );
+  return remarks;
 }

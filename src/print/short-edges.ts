@@ -31,5 +31,18 @@ export function withoutShortEdges({ positions, triangles }: Mesh, limit: number)
     const [a, b, c] = [find(triangles[t]!), find(triangles[t + 1]!), find(triangles[t + 2]!)];
     if (a !== b && b !== c && c !== a) kept.push(a, b, c);
   }
-  return { positions, triangles: Uint32Array.from(kept) };
+  return usedOnly(positions, kept);
+}
+
+/** Vertices that no triangle uses would count in the model's extents. */
+function usedOnly(positions: Float64Array, triangles: readonly number[]): Mesh {
+  const numbers = new Map<number, number>();
+  const renumbered = triangles.map((vertex) => {
+    const number = numbers.get(vertex) ?? numbers.size;
+    numbers.set(vertex, number);
+    return number;
+  });
+  const kept = new Float64Array(3 * numbers.size);
+  for (const [vertex, number] of numbers) kept.set(positions.subarray(3 * vertex, 3 * vertex + 3), 3 * number);
+  return { positions: kept, triangles: Uint32Array.from(renumbered) };
 }

@@ -21,11 +21,12 @@ export interface MineralFacts {
   readonly id: string;
   readonly name: string;
   readonly formula: string;
-  readonly habit: string;
-  /** The habit that the mineral's name alone stands for. */
-  readonly firstHabit: string;
-  /** Where the cell comes from. */
-  readonly source: string;
+  /** The preset's habit; null when the recipe gives forms of its own. */
+  readonly habit: string | null;
+  /** Whether it is the habit that the mineral's name alone stands for. */
+  readonly isFirstHabit: boolean;
+  /** Where the cell comes from; null when the recipe gives a cell or group of its own. */
+  readonly source: string | null;
 }
 
 /** A form at its central distance, in the recipe's own unit of length. */

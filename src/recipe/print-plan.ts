@@ -3,7 +3,7 @@ import type { PointGroup } from '../crystal/point-group.ts';
 import { type Zone, zone } from '../crystal/spaces.ts';
 import type { AxesPlan, Size } from './crystal.ts';
 import { type Millimetres, mm, QuantityError, readLength, readVolume } from './quantity.ts';
-import type { AxesInput, PrinterProfile, SizeInput, ZoneInput } from './schema.ts';
+import type { AxesInput, SizeInput, ZoneInput } from './schema.ts';
 
 /** Longest extent of a model whose recipe states no size, millimetres: within the usual hand size of 60 to 80 mm. */
 export const USUAL_SIZE: Size = { kind: 'longest', length: mm(70) };
@@ -39,7 +39,7 @@ function readSizeText(text: string, group: PointGroup | undefined): Size {
   if (word === 'between') return readSize({ between: target, length }, group);
   const scale = /^scale\s+(\S+)$/.exec(text.trim());
   if (scale) return readSize({ scale: Number(scale[1]) }, group);
-  return /(3|³|ml)\s*$/i.test(text) && /[a-z]/i.test(text)
+  return /[mc]m\s*[3³]\s*$|ml\s*$/i.test(text)
     ? readSize({ volume: text }, group)
     : { kind: 'longest', length: bounded(readLength(text)) };
 }
@@ -49,8 +49,8 @@ function positive(value: number, what: string): number {
   throw new QuantityError(`${what} of ${value} leaves nothing to print.`, 'Give a positive number.');
 }
 
-function bounded(length: Millimetres): Millimetres {
-  positive(length, 'a size');
+function bounded(length: Millimetres, what = 'a size'): Millimetres {
+  positive(length, what);
   if (length <= LARGEST_SIZE) return length;
   throw new QuantityError(
     `${length} mm is larger than ${LARGEST_SIZE} mm (10 m).`,
@@ -58,26 +58,46 @@ function bounded(length: Millimetres): Millimetres {
   );
 }
 
-/** Axes as a recipe states them; null for none. @throws CrystalError, QuantityError */
-export function readAxes(input: AxesInput, group: PointGroup | undefined, printer: PrinterProfile): AxesPlan | null {
+/** Axes as a recipe or a flag states them; null for none. @throws CrystalError, QuantityError */
+export function readAxes(input: AxesInput, group: PointGroup | undefined, usualDiameter: number): AxesPlan | null {
   if (input === false) return null;
-  const given = typeof input === 'object' ? input : {};
+  const given: AxesObject = typeof input === 'object' && !Array.isArray(input) ? input : choiceOf(input);
   const unknown = given.orders?.find((order) => ![2, 3, 4, 6, -3, -4, -6].includes(order));
   if (unknown !== undefined)
     throw new QuantityError(
       `no crystal has an axis of order ${unknown}.`,
       'Orders are 2, 3, 4 and 6; -3, -4 and -6 choose rotoinversion axes only.',
-      'orders',
+      typeof input === 'object' && !Array.isArray(input) ? 'orders' : undefined,
     );
-  const chosen = given.directions?.map((direction) => readDirection(direction, group));
   return {
     orders: given.orders ?? null,
-    directions: chosen ?? null,
+    directions: given.directions?.map((direction) => readDirection(direction, group)) ?? null,
     fit: given.fit ?? 'fused',
-    diameter: under('diameter', () => bounded(readLength(given.diameter ?? printer.rod.diameter))),
-    reach: under('reach', () => bounded(readLength(given.reach ?? USUAL_REACH))),
+    diameter: under('diameter', () => bounded(readLength(given.diameter ?? usualDiameter), 'a diameter')),
+    reach: under('reach', () => bounded(readLength(given.reach ?? USUAL_REACH), 'a reach')),
   };
 }
+
+type AxesObject = Exclude<AxesInput, boolean | string | number | readonly unknown[]>;
+
+/** true, "all", 3, [3, 2], "3,2", "-4", "2/m", "[001],[110]", "c". */
+export function choiceOf(
+  input: boolean | string | number | readonly number[],
+): Pick<AxesObject, 'orders' | 'directions'> {
+  if (typeof input === 'number') return { orders: [input] };
+  if (typeof input === 'object') return { orders: [...input] };
+  if (input === true || input === false || input.trim() === 'all') return {};
+  const words = input.match(/\[[^\]]*\]|[^\s,]+/g) ?? [];
+  if (words.length === 0) throw new QuantityError('no axes are named.', CHOICES);
+  const isOrder = (word: string): boolean => /^[-−]?\d(\/m)?$/u.test(word);
+  const orders = words.filter(isOrder).map((word) => Number(word.replace('−', '-').replace('/m', '')));
+  const directions = words.filter((word) => !isOrder(word));
+  const strange = directions.find((word) => !/^\[.*\]$|^[abc]$/i.test(word));
+  if (strange !== undefined) throw new QuantityError(`"${strange}" names no axes.`, CHOICES);
+  return { ...(orders.length > 0 && { orders }), ...(directions.length > 0 && { directions }) };
+}
+
+const CHOICES = 'Write all, orders such as 3,2 or -4, or directions such as "[001],[110]".';
 
 /** Names the key whose value is being read in the error about it. */
 function under<T>(key: string, step: () => T): T {

@@ -25,8 +25,6 @@ export type ProblemCode =
   | 'index'
   | 'cell'
   | 'distance'
-  | 'repeated-form'
-  | 'open'
   | 'size'
   | 'axes'
   | 'file-name';
@@ -47,6 +45,8 @@ export interface Origin {
   readonly name: string;
   readonly text?: string;
   place?(path: Path): Place | undefined;
+  /** Where a value comes from that is not in the text, for instance a flag. */
+  elsewhere?(path: Path): string | undefined;
 }
 
 /** All problems of one recipe. The message shows each with its line, underlined. */
@@ -55,6 +55,8 @@ export class RecipeError extends Error {
 
   /** In the order in which they stand in the text. */
   readonly problems: readonly Problem[];
+  /** All of them lie outside the recipe's text, for instance in flags. */
+  readonly isElsewhere: boolean;
 
   constructor(
     readonly origin: Origin,
@@ -64,11 +66,14 @@ export class RecipeError extends Error {
     const sorted = [...problems].sort((a, b) => offset(a) - offset(b));
     super(sorted.map((problem) => describe(origin, problem)).join('\n\n'));
     this.problems = sorted;
+    this.isElsewhere = problems.length > 0 && problems.every(({ path }) => origin.elsewhere?.(path) !== undefined);
   }
 }
 
 /** One problem as a paragraph: place, sentence, the line with the text underlined, the mend. */
 export function describe(origin: Origin, problem: Problem): string {
+  const elsewhere = origin.elsewhere?.(problem.path);
+  if (elsewhere) return [`${elsewhere}: ${problem.message}`, ...(problem.hint ? [`  ${problem.hint}`] : [])].join('\n');
   const place = origin.place?.(problem.path);
   const spot = place ? `${origin.name}:${place.line}:${place.column}` : [origin.name, ...keys(problem.path)].join(', ');
   const lines = [`${spot}: ${problem.message}`];

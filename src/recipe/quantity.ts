@@ -33,10 +33,9 @@ export function readVolume(value: number | string): number {
 function read(value: number | string, units: Readonly<Record<string, number>>, what: string, known: string): number {
   if (typeof value === 'number') return value;
   const match = /^\s*([+-]?\d+(?:\.\d+)?(?:e[+-]?\d+)?|[+-]?\.\d+)\s*(.*?)\s*$/iu.exec(value);
-  if (!match) {
-    const comma = /^\s*\d+,\d+/u.test(value) ? 'Write the decimal sign as a point. ' : '';
-    throw new QuantityError(`"${value}" is not ${what}.`, `${comma}Give a number, with ${known} if you like.`);
-  }
+  if (/^\s*[+-]?\d*,\d/u.test(value))
+    throw new QuantityError(`"${value}" has a decimal comma.`, `Write a point: ${value.trim().replace(',', '.')}`);
+  if (!match) throw new QuantityError(`"${value}" is not ${what}.`, `Give a number, with ${known} if you like.`);
   const unit = match[2] ?? '';
   const factor = unit === '' ? 1 : units[unit.toLowerCase()];
   if (factor === undefined) throw new QuantityError(`"${unit}" is not a unit of ${what} known here.`, `Use ${known}.`);

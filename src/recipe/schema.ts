@@ -3,6 +3,8 @@ import { z } from 'zod';
 /** More forms than any crystal shows, and few enough to answer at once. */
 export const MOST_FORMS = 250;
 
+export const LONGEST_TITLE = 120;
+
 const lengthText = z.union([z.number(), z.string()]).describe('millimetres, or text with mm, cm, m or in');
 const faceText = z
   .union([z.string(), z.number(), z.array(z.number()).min(3).max(4)])
@@ -28,7 +30,7 @@ const cell = z
 
 const formEntry = z.strictObject({
   face: faceText,
-  distance: z.number().describe('central distance, relative to the other forms'),
+  distance: z.number().meta({ description: 'central distance, relative to the other forms', exclusiveMinimum: 0 }),
 });
 
 const sizes = [
@@ -52,8 +54,8 @@ const chosenAxes = z.strictObject({
   reach: lengthText.optional().describe('how far a rod stands out of the crystal'),
 });
 const axes = z
-  .union([z.boolean(), z.literal('all'), chosenAxes])
-  .describe('symmetry axes as rods; true or "all" for every axis');
+  .union([z.boolean(), z.string(), z.number(), z.array(z.number()), chosenAxes])
+  .describe('symmetry axes as rods: true or "all" for every axis, "3,2" by order, "[001]" by direction');
 
 const print = z.strictObject({
   size: size.optional(),
@@ -65,7 +67,12 @@ const print = z.strictObject({
 
 /** What a person may write. Meaning is checked afterwards, in `resolve.ts`. */
 export const recipeSchema = z.strictObject({
-  title: z.string().max(120).optional(),
+  title: z
+    .string()
+    .min(1)
+    .max(LONGEST_TITLE)
+    .regex(/^[^\p{Cc}]*$/u)
+    .optional(),
   mineral: z.string().optional().describe('a mineral preset'),
   habit: z.string().optional().describe("one of the mineral's habits"),
   pointGroup: z.union([z.string(), z.number()]).optional().describe('Hermann–Mauguin or Schoenflies symbol'),
@@ -121,7 +128,8 @@ export type SetPreset = z.infer<typeof setSchema>;
 export const printerSchema = z.strictObject({
   name: z.string(),
   source: citation,
-  bed: z.tuple([z.number(), z.number(), z.number()]),
+  bed: z.tuple([z.number(), z.number(), z.number()]).describe('largest object: width, depth, height'),
+  wall: z.number().describe('thinnest wall that prints'),
   rod: z.strictObject({
     diameter: z.number().describe('usual rod'),
     smallest: z.number().describe('thinnest rod that prints'),
@@ -130,7 +138,27 @@ export const printerSchema = z.strictObject({
 });
 export type PrinterProfile = z.infer<typeof printerSchema>;
 
+/** Words that an editor can offer while one types. */
+export interface KnownWords {
+  readonly minerals: readonly string[];
+  readonly printers: readonly string[];
+  readonly pointGroups: readonly string[];
+}
+
 /** The recipe as JSON Schema, for editors that complete and check YAML while one types. */
-export function recipeJsonSchema(): object {
-  return { title: 'Goniolith recipe', ...z.toJSONSchema(recipeSchema, { io: 'input' }) };
+export function recipeJsonSchema(known?: KnownWords): object {
+  const schema = z.toJSONSchema(recipeSchema, { io: 'input' });
+  if (known) {
+    offer(schema.properties?.mineral, known.minerals);
+    offer(schema.properties?.pointGroup, known.pointGroups);
+    const print = schema.properties?.print;
+    if (typeof print === 'object') offer(print.properties?.printer, known.printers);
+  }
+  const example = { mineral: 'quartz', habit: 'prismatic', print: { size: '90 mm along c', axes: 'all' } };
+  return { title: 'Goniolith recipe', ...schema, examples: [example] };
+}
+
+/** Examples, not an enumeration: other spellings are read too. */
+function offer(property: unknown, words: readonly string[]): void {
+  if (typeof property === 'object' && property !== null) Object.assign(property, { examples: words });
 }

@@ -14,9 +14,6 @@ export interface Shelf {
 
 export type PresetKind = 'minerals' | 'sets' | 'printers';
 
-/** A shelf with nothing on it, for recipes that give everything themselves. */
-export const EMPTY_SHELF: Shelf = { list: () => [], read: () => undefined };
-
 interface Kinds {
   minerals: MineralPreset;
   sets: SetPreset;
@@ -44,18 +41,18 @@ export function presetRecipe(shelf: Shelf, id: string): Written {
   };
   const mineral = preset(shelf, 'minerals', name);
   if (mineral && more.length === 0) {
-    if (part === undefined || part in mineral.habits)
+    if (part === undefined || Object.hasOwn(mineral.habits, part))
       return { value: { mineral: name, ...(part !== undefined && { habit: part }) }, origin };
     return refuse({ code: 'unknown-habit', ...unknownHabit(name, part, Object.keys(mineral.habits)) });
   }
   const set = preset(shelf, 'sets', name);
   if (set && part !== undefined && more.length === 0) {
-    const recipe = set.recipes[part];
-    if (recipe) return { value: recipe, origin };
+    const recipe = Object.hasOwn(set.recipes, part) ? set.recipes[part] : undefined;
+    if (recipe) return { value: { ...recipe, print: { file: fileWord(name, part), ...recipe.print } }, origin };
     return refuse({
       code: 'unknown-mineral',
       message: `the set ${name} has no "${part}".`,
-      hint: `Did you mean ${either(nearest(part, Object.keys(set.recipes), 4))}?`,
+      hint: guess(nearest(part, Object.keys(set.recipes), 4), `\`goniolith presets ${name}\` lists them.`),
     });
   }
   if (set)
@@ -78,7 +75,10 @@ export function recipeNames({ recipes }: SetPreset): string[] {
 
 export const unknownMineral = (shelf: Shelf, name: string) => ({
   message: `no mineral "${name}" among the presets.`,
-  hint: `Did you mean ${either(nearest(name, shelf.list('minerals'), 3))}? \`goniolith presets\` lists all; a recipe can also give pointGroup, cell and forms itself.`,
+  hint: guess(
+    nearest(name, [...shelf.list('minerals'), ...shelf.list('sets')], 3),
+    '`goniolith presets` lists all; a recipe can also give pointGroup, cell and forms itself.',
+  ),
 });
 
 export const unknownHabit = (mineral: string, habit: string, known: readonly string[]) => ({
@@ -90,3 +90,9 @@ export const unknownHabit = (mineral: string, habit: string, known: readonly str
 export function either(words: readonly string[], joint: 'or' | 'and' = 'or'): string {
   return words.length < 2 ? (words[0] ?? 'nothing') : `${words.slice(0, -1).join(', ')} ${joint} ${words.at(-1)}`;
 }
+
+const guess = (near: readonly string[], otherwise: string): string =>
+  near.length > 0 ? `Did you mean ${either(near)}? ${otherwise}` : otherwise;
+
+/** A set's name and a recipe's key as a file name, which has no place for a minus sign that means an overbar. */
+const fileWord = (set: string, key: string): string => `${set}-${key.replace(/-(?=\d)/g, 'bar')}`;

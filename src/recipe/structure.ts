@@ -1,7 +1,7 @@
 import type { z } from 'zod';
 import { nearest } from '../crystal/nearest.ts';
 import type { Path, Problem } from './problem.ts';
-import { KNOWN_KEYS, MOST_FORMS, recipeSchema } from './schema.ts';
+import { KNOWN_KEYS, LONGEST_TITLE, MOST_FORMS, recipeSchema } from './schema.ts';
 
 type Issue = z.core.$ZodIssue;
 
@@ -35,6 +35,13 @@ function toProblems(issue: Issue, root: unknown): Problem[] {
 }
 
 function unknownKey(path: Path, key: string): Problem {
+  if (/^\d+$/.test(key))
+    return {
+      code: 'unknown-key',
+      message: `"${key}" stands alone here, perhaps after a decimal comma.`,
+      hint: 'Write the decimal sign as a point, for instance 1.62.',
+      path: [...path, `?${key}`],
+    };
   const known = keysAt(path);
   const [guess] = nearest(key, known, 1);
   const place = path.length ? `in ${path.filter((part) => typeof part === 'string').join(' › ')}` : 'in a recipe';
@@ -61,6 +68,13 @@ function bestOfUnion(errors: readonly (readonly Issue[])[], path: Path, root: un
 
 function tooBig(path: Path, root: unknown): Problem {
   const value = valueAt(root, path);
+  if (path[0] === 'title')
+    return {
+      code: 'wrong-kind',
+      message: 'the title is too long.',
+      hint: `Use at most ${LONGEST_TITLE} characters.`,
+      path,
+    };
   if (path[0] === 'forms' && path.length === 1 && Array.isArray(value))
     return {
       code: 'too-large',
@@ -87,7 +101,7 @@ function wrongKind(path: Path, root: unknown): Problem {
   const message =
     path.length === 0
       ? `a recipe is a list of keys and values, not ${told(value)}.`
-      : `${told(value)} cannot be read as ${String(path.at(-1))}.`;
+      : `${told(value)} cannot be read as ${spoken(path.at(-1))}.`;
   return {
     code: path.at(-1) === 'distance' ? 'distance' : 'wrong-kind',
     message,
@@ -97,13 +111,14 @@ function wrongKind(path: Path, root: unknown): Problem {
 }
 
 const EXPECTED: Readonly<Record<string, string>> = {
+  title: 'a line of text without control characters, in quotes if it is a number',
   distance: 'a positive number, the central distance relative to the other forms',
   face: 'face indices such as "111", "10-11" or [1, 0, -1, 1], in quotes',
   forms: 'a list such as  - { face: "111", distance: 1 }',
   cell: 'a, b, c in ångström and alpha, beta, gamma in degrees, as far as the system leaves them free',
   pointGroup: 'a symbol such as m-3m, "321" or D3d',
   size: 'a length (70, "7 cm"), or one of longest; along and length; between and length; volume; scale',
-  axes: 'true, "all", or orders, directions, fit, diameter, reach',
+  axes: 'all, "3,2", "[001]", or keys such as { orders: [3, 2], fit: separate, diameter: 3, reach: 12 }',
   orders: 'a list of 2, 3, 4, 6 (negative: only rotoinversion axes)',
   directions: 'a list such as ["[001]", "[110]"]',
   fit: 'fused or separate',
@@ -120,6 +135,10 @@ const EXPECTED: Readonly<Record<string, string>> = {
   ratios: 'axial ratios such as "0.5:1:0.7"',
   scale: 'a number: millimetres for each unit of distance',
 };
+
+/** A key, or a place in a list counted from 1. */
+const spoken = (key: string | number | undefined): string =>
+  typeof key === 'number' ? `entry ${key + 1} of the list` : String(key);
 
 function keysAt(path: Path): readonly string[] {
   return KNOWN_KEYS[path.filter((key) => typeof key === 'string').join('.')] ?? [];

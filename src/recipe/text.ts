@@ -26,7 +26,12 @@ export function readText(text: string, name: string): Written {
   if (first) {
     const syntax = { ...plain, place: () => spot(lines, first.pos[0], Math.max(1, first.pos[1] - first.pos[0])) };
     throw new RecipeError(syntax, [
-      { code: 'syntax', message: `this is not YAML: ${first.message}.`, hint: mend(first.code), path: [] },
+      {
+        code: 'syntax',
+        message: `this is not YAML: ${YAML_FAULTS[first.code] ?? 'it cannot be read from here on'}.`,
+        hint: mend(first.code),
+        path: [],
+      },
     ]);
   }
   keepLeadingZeros(document);
@@ -50,9 +55,24 @@ function keepLeadingZeros(document: Document): void {
   });
 }
 
+/** The library's error codes in our words. */
+const YAML_FAULTS: Readonly<Record<string, string>> = {
+  BAD_INDENT: 'the indentation does not fit, or a bracket is not closed',
+  BLOCK_AS_IMPLICIT_KEY: 'there are two colons in one line',
+  BLOCK_IN_FLOW: 'a list with dashes stands inside brackets',
+  DUPLICATE_KEY: 'a key is given twice',
+  MISSING_CHAR: 'a bracket, a quote or a comma is missing',
+  MULTILINE_IMPLICIT_KEY: 'a colon is missing, or a text runs over two lines',
+  MULTIPLE_DOCS: 'the file holds several recipes, separated by ---',
+  TAB_AS_INDENT: 'a line is indented with a tab',
+  UNEXPECTED_TOKEN: 'something stands here that does not belong',
+};
+
 function mend(code: string): string {
   if (code === 'TAB_AS_INDENT') return 'Indent with blanks, not with tabs.';
   if (code === 'DUPLICATE_KEY') return 'Give each key once.';
+  if (code === 'MULTIPLE_DOCS') return 'Put each recipe into a file of its own.';
+  if (code === 'BLOCK_AS_IMPLICIT_KEY') return 'Put text that holds a colon in quotes.';
   return 'Check the indentation, the colons and the brackets; put text with : or # in quotes.';
 }
 

@@ -137,10 +137,27 @@ describe('a recipe with', () => {
   });
 
   it('several faults tells all of them, in their order', async () => {
-    const { err } = await makeFrom('mineral: quarz\nforms:\n  - { face: "000", distance: -1 }\nprint: { sise: 3 }\n');
-    const [mineral, key] = ['no mineral "quarz"', '"sise" means nothing'].map((text) => err.indexOf(text));
-    expect(mineral).toBeGreaterThan(-1);
-    expect(key).toBeGreaterThan(mineral!);
+    const { err } = await makeFrom(
+      'mineral: quarz\nforms:\n  - { face: "000", distance: -1 }\nprint: { sise: 3, printer: nil, axes: { orders: [5] } }\n',
+    );
+    const told = [
+      'no mineral "quarz"',
+      'all zeros',
+      'behind the centre',
+      '"sise" means nothing',
+      'profile "nil"',
+      'order 5',
+    ];
+    const places = told.map((text) => err.indexOf(text));
+    expect(Math.min(...places), err).toBeGreaterThan(-1);
+    expect(places).toEqual([...places].sort((a, b) => a - b));
+  });
+
+  it('an unknown group tells what is wrong with its faces too', async () => {
+    const { err } = await makeFrom(
+      'pointGroup: xyz\nforms:\n  - { face: "1 1 1 1", distance: 1 }\n  - { face: "1.5 1 1", distance: 0 }\n',
+    );
+    for (const fault of ['"xyz" is not one', 'do not add up', 'through the centre']) expect(err).toContain(fault);
   });
 });
 
@@ -199,6 +216,16 @@ describe('wrong use', () => {
     [['make', 'quartz', '--rods', 'loose', '--axes'], /--rods is fused or separate/],
     [['make', 'quartz', '--reach', '5'], /go with --axes/],
     [['draw', 'quartz', '--view', 'sideways'], /view/],
+    [['draw', 'all', '--sheet', '--labels', 'letters'], /contact sheet has no --labels/],
+    [['draw', 'quartz', '--columns', '3'], /--columns goes with --sheet/],
+    [['draw', 'quartz', '--key'], /leave out the recipe/],
+    [['draw', 'quartz', '--out', 'x.png'], /let --out end in .svg/],
+    [['draw', 'all'], /go with --sheet/],
+    [['make', 'quartz', 'calcite', '--name', 'both'], /--name takes one recipe/],
+    [['make', 'quartz', '--name', 'x.stl'], /takes no ending/],
+    [['make', 'quartz', '--size', '0,5'], /^goniolith: --size: .*decimal comma/],
+    [['make', 'quartz', '--printer', 'prusa-x'], /^goniolith: --printer: no printer profile/],
+    [['quartz'], /goniolith make quartz/],
   ])('%j exits with 2', async (words, message) => {
     const { code, err } = await goniolith(...words);
     expect(err).toMatch(message);

@@ -56,6 +56,44 @@ describe('make', () => {
     expect(err).toMatch(/\{111\} does not appear: at distance 2 .* below 1.7321/);
   });
 
+  it('names models of recipe files by the file, and of sets by their key', async () => {
+    const place = folder();
+    for (const name of ['vein one', 'vein-two']) writeFileSync(join(place, `${name}.yaml`), 'mineral: quartz\n');
+    const files = ['vein one', 'vein-two'].map((name) => join(place, `${name}.yaml`));
+    const { out } = await goniolith('make', 'quartz', ...files, '32-groups/1', '32-groups/-1', '--out', place);
+    const names = ['quartz', 'vein-one', 'vein-two', '32-groups-1', '32-groups-bar1'];
+    expect(out.trim().split('\n')).toEqual(names.map((name) => join(place, `${name}.stl`)));
+  });
+
+  it('writes nothing when one of several recipes is at fault, and refuses two models of one name', async () => {
+    const out = join(folder(), 'out');
+    expect((await goniolith('make', 'quartz', 'nope', '--out', out)).code).toBe(1);
+    expect((await goniolith('make', 'quartz', 'quartz', '--out', out)).code).toBe(1);
+    expect(existsSync(out)).toBe(false);
+  });
+
+  it('takes a recipe after a bare --axes for the recipe', async () => {
+    const { code, err } = await goniolith('make', '--axes', 'quartz', '--out', folder());
+    expect(code).toBe(0);
+    expect(err).toMatch(/with rods \d/);
+  });
+
+  it('keeps no provenance that no longer holds', async () => {
+    const file = join(folder(), 'own.yaml');
+    writeFileSync(
+      file,
+      'mineral: quartz\ncell: { a: 9, c: 20 }\nforms: [{ face: m, distance: 1 }, { face: r, distance: 1.5 }]\n',
+    );
+    const known = JSON.parse((await goniolith('inspect', file, '--json')).out);
+    expect(known).toMatchObject({ title: 'Quartz', mineral: { habit: null, source: null } });
+    expect(known.forms[0].letter).toBe('m');
+  });
+
+  it('says when a part is larger than the printer', async () => {
+    const { err } = await goniolith('make', 'quartz', '--size', '900', '--printer', 'sla', '--out', folder());
+    expect(err).toMatch(/larger than the 150 × 128 × 80 mm/);
+  });
+
   it('keeps other files in the folder', async () => {
     const place = folder();
     writeFileSync(join(place, 'notes.txt'), 'mine');
@@ -85,6 +123,15 @@ describe('check', () => {
     const corner = [0, 1, 2].map((axis) => whole.readFloatLE(84 + 12 + 4 * axis));
     expect(out).toMatch(/NOT sound/);
     expect(out).toContain(String(Number(corner[0]!.toFixed(3))).slice(0, 5));
+  });
+
+  it('goes on after a file that cannot be read', async () => {
+    const place = folder();
+    await goniolith('make', 'quartz', '--out', place);
+    const { code, out, err } = await goniolith('check', join(place, 'none.stl'), join(place, 'quartz.stl'));
+    expect(code).toBe(1);
+    expect(err).toMatch(/none\.stl/);
+    expect(out).toMatch(/quartz\.stl: sound/);
   });
 
   it('refuses what is no STL', async () => {
@@ -184,7 +231,7 @@ describe('the built command', () => {
       const place = folder();
       const run = spawn(
         process.execPath,
-        [BUILT, 'make', 'quartz', 'quartz', 'quartz', '--axes', '--rods', 'separate', '--out', place],
+        [BUILT, 'make', 'quartz', 'pyrite', 'gypsum', '--axes', '--rods', 'separate', '--out', place],
         { stdio: 'ignore' },
       );
       await new Promise((done) => setTimeout(done, delay));

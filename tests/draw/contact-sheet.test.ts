@@ -4,8 +4,8 @@ import { CRYSTALS, cube } from './crystals.ts';
 import { pathPoints, readXml } from './xml.ts';
 
 const entries = Array.from({ length: 100 }, (_, i) => {
-  const [caption, habit] = CRYSTALS[i % CRYSTALS.length]!;
-  return { habit, caption: `${caption} no. ${i}`, ...(i % 3 === 0 && { subcaption: '{101\u03051}' }) };
+  const [caption, shape] = CRYSTALS[i % CRYSTALS.length]!;
+  return { shape, caption: `${caption} no. ${i}`, ...(i % 3 === 0 && { subcaption: '{101\u03051}' }) };
 });
 
 /** Bounds of every crystal, from the closed line around it. */
@@ -48,13 +48,13 @@ describe('a sheet of 100 crystals', () => {
 describe('columns', () => {
   it('are as many as asked for', () => {
     const lefts = new Set(
-      pictures(contactSheet(Array(6).fill({ habit: cube, caption: 'x' }), { columns: 3 })).map(({ left }) => left),
+      pictures(contactSheet(Array(6).fill({ shape: cube, caption: 'x' }), { columns: 3 })).map(({ left }) => left),
     );
     expect(lefts.size).toBe(3);
   });
 
   it.each([0, -1, 2.5])('refuses %d', (columns) => {
-    expect(() => contactSheet([{ habit: cube, caption: 'x' }], { columns })).toThrow('whole number');
+    expect(() => contactSheet([{ shape: cube, caption: 'x' }], { columns })).toThrow('whole number');
   });
 
   it('refuses an empty sheet', () => {

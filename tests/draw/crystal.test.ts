@@ -2,28 +2,28 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { miller, zone } from '../../src/crystal/spaces.ts';
 import { type DrawOptions, drawCrystal } from '../../src/draw/crystal.ts';
-import type { ClosedHabit } from '../../src/habit/habit.ts';
+import type { ClosedShape } from '../../src/shape/shape.ts';
 import {
   anyCrystal,
   anyView,
   CRYSTALS,
   cube,
-  habitOf,
   hexaoctahedron,
   monoclinic,
   octahedron,
   quartz,
   rodsOf,
   scalenohedron,
+  shapeOf,
   tetrahedron,
 } from './crystals.ts';
 import { pathPoints, readXml, type XmlElement } from './xml.ts';
 
 const BARE: DrawOptions = { title: false, legend: false, scaleBar: false };
 
-function everything(habit: ClosedHabit): DrawOptions {
-  const millimetresPerUnit = 70 / habit.measures.circumscribedRadius / 2;
-  const axes = rodsOf(habit, millimetresPerUnit, { reach: 12, diameter: 3 });
+function everything(shape: ClosedShape): DrawOptions {
+  const millimetresPerUnit = 70 / shape.measures.circumscribedRadius / 2;
+  const axes = rodsOf(shape, millimetresPerUnit, { reach: 12, diameter: 3 });
   return { axes, labels: 'letters', millimetresPerUnit, height: true };
 }
 
@@ -47,13 +47,13 @@ describe('edges and faces of a drawing', () => {
     ['cube along [111]', cube, [1, 1, 1], { faces: 3, outline: 6, inner: 3, thin: 3 }],
     ['cube along [001]', cube, [0, 0, 1], { faces: 1, outline: 4, inner: 0, thin: 4 }],
     ['octahedron along [001]', octahedron, [0, 0, 1], { faces: 4, outline: 4, inner: 4, thin: 4 }],
-  ] as const)('%s', (_, habit, [u, v, w], expected) => {
-    expect(edgesOf(drawCrystal(habit, { ...BARE, view: { along: zone(u, v, w) } }))).toEqual(expected);
+  ] as const)('%s', (_, shape, [u, v, w], expected) => {
+    expect(edgesOf(drawCrystal(shape, { ...BARE, view: { along: zone(u, v, w) } }))).toEqual(expected);
   });
 
-  it.each(CRYSTALS)('of the %s in the general view: strong and thin edges are all edges', (_, habit) => {
-    const { thin, inner, outline } = edgesOf(drawCrystal(habit, BARE));
-    expect(thin + inner + outline).toBe(habit.solid.neighbour.length / 2);
+  it.each(CRYSTALS)('of the %s in the general view: strong and thin edges are all edges', (_, shape) => {
+    const { thin, inner, outline } = edgesOf(drawCrystal(shape, BARE));
+    expect(thin + inner + outline).toBe(shape.solid.neighbour.length / 2);
   });
 
   it('leaves hidden edges out when asked', () => {
@@ -74,18 +74,18 @@ describe('edges and faces of a drawing', () => {
 });
 
 describe('the file', () => {
-  it.each(CRYSTALS)('of the %s with everything on it is well-formed, and the same every time', (_, habit) => {
-    const svg = drawCrystal(habit, everything(habit));
+  it.each(CRYSTALS)('of the %s with everything on it is well-formed, and the same every time', (_, shape) => {
+    const svg = drawCrystal(shape, everything(shape));
     const [root] = readXml(svg);
     expect(root!.attributes.xmlns).toBe('http://www.w3.org/2000/svg');
-    expect(drawCrystal(habit, everything(habit))).toBe(svg);
+    expect(drawCrystal(shape, everything(shape))).toBe(svg);
     expect(svg).not.toMatch(/NaN|Infinity|undefined|null|-0[^.\d]|\d\.\d{3}|\de[+-]\d/);
   });
 
   it('keeps everything inside the page, from everywhere', () => {
     fc.assert(
-      fc.property(anyCrystal, anyView, fc.boolean(), (habit, view, full) => {
-        const elements = readXml(drawCrystal(habit, { ...(full ? everything(habit) : BARE), view }));
+      fc.property(anyCrystal, anyView, fc.boolean(), (shape, view, full) => {
+        const elements = readXml(drawCrystal(shape, { ...(full ? everything(shape) : BARE), view }));
         const [, , width, height] = elements[0]!.attributes.viewBox!.split(' ').map(Number);
         const points = elements.flatMap(({ attributes: { d, x, y } }): [number, number][] =>
           d ? pathPoints(d) : x && y ? [[Number(x), Number(y)]] : [],
@@ -117,7 +117,7 @@ const words = (svg: string): string[] =>
   readXml(svg).flatMap(({ name, text }) => (name === 'text' && text !== '' ? [text] : []));
 
 describe('words around the picture', () => {
-  it('name mineral, habit and formula, and every form that shows', () => {
+  it('name mineral, shape and formula, and every form that shows', () => {
     const text = words(drawCrystal(quartz, { labels: 'letters' })).join('|');
     expect(text).toContain('SiO₂');
     for (const name of ['hexagonal prism', 'rhombohedron']) expect(text).toContain(name);
@@ -133,7 +133,7 @@ describe('words around the picture', () => {
       { face: 'r', distance: 1 },
       { face: 'z', distance: 1.1 },
     ];
-    const text = words(drawCrystal(habitOf({ mineral: 'quartz', forms }))).join('|');
+    const text = words(drawCrystal(shapeOf({ mineral: 'quartz', forms }))).join('|');
     expect(text).toContain('rhombohedron');
     expect(text).not.toContain('hexagonal prism');
   });

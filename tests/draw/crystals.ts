@@ -1,18 +1,18 @@
 import fc from 'fast-check';
 import { PRESET_FOLDER } from '../../src/disk/preset-folder.ts';
-import { type ClosedHabit, isClosed, polyhedron } from '../../src/habit/habit.ts';
-import { planRods, type RodPlan } from '../../src/habit/rod-plan.ts';
 import { mm } from '../../src/recipe/quantity.ts';
 import { read } from '../../src/recipe/read.ts';
+import { planRods, type RodPlan } from '../../src/rods/plan.ts';
+import { type ClosedShape, isClosed, polyhedron } from '../../src/shape/shape.ts';
 
-export function habitOf(recipe: unknown): ClosedHabit {
-  const habit = polyhedron(read(recipe, PRESET_FOLDER).crystal);
-  if (!isClosed(habit)) throw new Error('the crystal is open');
-  return habit;
+export function shapeOf(recipe: unknown): ClosedShape {
+  const shape = polyhedron(read(recipe, PRESET_FOLDER).crystal);
+  if (!isClosed(shape)) throw new Error('the crystal is open');
+  return shape;
 }
 
-const cubic = (pointGroup: string, ...forms: [face: string, distance: number][]): ClosedHabit =>
-  habitOf({ pointGroup, cell: { a: 5 }, forms: forms.map(([face, distance]) => ({ face, distance })) });
+const cubic = (pointGroup: string, ...forms: [face: string, distance: number][]): ClosedShape =>
+  shapeOf({ pointGroup, cell: { a: 5 }, forms: forms.map(([face, distance]) => ({ face, distance })) });
 
 /** Edge 2. */
 export const cube = cubic('m-3m', ['100', 1]);
@@ -20,13 +20,13 @@ export const octahedron = cubic('m-3m', ['111', 1]);
 export const cuboctahedron = cubic('m-3m', ['100', 1], ['111', 2 / Math.sqrt(3)]);
 export const tetrahedron = cubic('-43m', ['111', 1]);
 export const hexaoctahedron = cubic('m-3m', ['123', 1]);
-export const scalenohedron = habitOf({
+export const scalenohedron = shapeOf({
   title: 'Calcite <dogtooth> & "spar"',
   pointGroup: '-3m1',
   cell: { a: 4.99, c: 17.06 },
   forms: [{ face: '21-34', distance: 1 }],
 });
-export const monoclinic = habitOf({
+export const monoclinic = shapeOf({
   pointGroup: '2/m',
   cell: { a: 5.68, b: 15.18, c: 6.52, beta: 118.4 },
   forms: [
@@ -35,13 +35,13 @@ export const monoclinic = habitOf({
     { face: '111', distance: 1.6 },
   ],
 });
-export const triclinic = habitOf({
+export const triclinic = shapeOf({
   pointGroup: '-1',
   cell: { a: 7, b: 9, c: 6, alpha: 95, beta: 105, gamma: 88 },
   forms: ['100', '010', '001', '1-10', '111', '-111', '101'].map((face, i) => ({ face, distance: 1 + 0.06 * i })),
 });
 /** Point group 321: polar two-fold axes; letters m, r and z. */
-export const quartz = habitOf({
+export const quartz = shapeOf({
   mineral: 'quartz',
   forms: [
     { face: 'm', distance: 1 },
@@ -50,7 +50,7 @@ export const quartz = habitOf({
   ],
 });
 
-export const CRYSTALS: readonly (readonly [name: string, habit: ClosedHabit])[] = [
+export const CRYSTALS: readonly (readonly [name: string, shape: ClosedShape])[] = [
   ['cube', cube],
   ['octahedron', octahedron],
   ['cuboctahedron', cuboctahedron],
@@ -64,11 +64,11 @@ export const CRYSTALS: readonly (readonly [name: string, habit: ClosedHabit])[] 
 
 /** All axes of a crystal as rods, or those of some orders. Lengths in millimetres. */
 export const rodsOf = (
-  habit: ClosedHabit,
+  shape: ClosedShape,
   millimetresPerUnit: number,
   { diameter, reach, orders = null }: { diameter: number; reach: number; orders?: number[] | null },
 ): RodPlan =>
-  planRods(habit, millimetresPerUnit, {
+  planRods(shape, millimetresPerUnit, {
     orders,
     directions: null,
     fit: 'fused',
@@ -76,7 +76,7 @@ export const rodsOf = (
     reach: mm(reach),
   });
 
-export const anyCrystal = fc.constantFrom(...CRYSTALS.map(([, habit]) => habit));
+export const anyCrystal = fc.constantFrom(...CRYSTALS.map(([, shape]) => shape));
 /** Anywhere on the sphere; fast-check alone would mostly choose angles next to 0, 90 and 180. */
 const spread = fc.record({ turn: fc.nat(359_999), tilt: fc.nat(179_999) }).map(({ turn, tilt }) => ({
   turn: ((turn * 7919) % 360_000) / 1000 - 180,

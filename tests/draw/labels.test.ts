@@ -6,8 +6,8 @@ import { projectAll } from '../../src/draw/project.ts';
 import type { Point } from '../../src/draw/vector.ts';
 import { viewFrame } from '../../src/draw/view.ts';
 import { look } from '../../src/draw/visible.ts';
-import type { ClosedHabit } from '../../src/habit/habit.ts';
 import { faceCorners } from '../../src/polyhedron/measures.ts';
+import type { ClosedShape } from '../../src/shape/shape.ts';
 import { anyCrystal, anyView, cube, quartz } from './crystals.ts';
 import { contains } from './ray.ts';
 
@@ -64,21 +64,21 @@ describe('placing a label', () => {
   });
 });
 
-function pageFaces(habit: ClosedHabit, view: Parameters<typeof viewFrame>[0], scale: number): PageFace[] {
-  const frame = viewFrame(view, habit.crystal.metric);
-  const points = projectAll(frame, habit.measures.positions).map(([x, y]): Point => [300 + scale * x, 300 - scale * y]);
-  return look(habit, frame.toward).front.map((face) => ({
+function pageFaces(shape: ClosedShape, view: Parameters<typeof viewFrame>[0], scale: number): PageFace[] {
+  const frame = viewFrame(view, shape.crystal.metric);
+  const points = projectAll(frame, shape.measures.positions).map(([x, y]): Point => [300 + scale * x, 300 - scale * y]);
+  return look(shape, frame.toward).front.map((face) => ({
     face,
-    outline: faceCorners(habit.solid, face).map((vertex) => points[vertex]!),
+    outline: faceCorners(shape.solid, face).map((vertex) => points[vertex]!),
   }));
 }
 
 describe('labels of faces', () => {
   it('lie wholly inside their faces', () => {
     fc.assert(
-      fc.property(anyCrystal, anyView, fc.constantFrom('letters', 'indices'), (habit, view, kind) => {
-        const faces = pageFaces(habit, view, 240 / habit.measures.circumscribedRadius);
-        for (const label of faceLabels(habit, kind, faces, [])) {
+      fc.property(anyCrystal, anyView, fc.constantFrom('letters', 'indices'), (shape, view, kind) => {
+        const faces = pageFaces(shape, view, 240 / shape.measures.circumscribedRadius);
+        for (const label of faceLabels(shape, kind, faces, [])) {
           const { outline } = faces.find(({ face }) => face === label.face)!;
           // Shrunk a little, because corners of a label that fits exactly lie on the face's edges.
           const box = corners({ centre: label.centre, size: label.size * 0.999 }, label.box.width, label.box.height);

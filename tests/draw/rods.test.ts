@@ -6,20 +6,20 @@ import { type DrawnRods, type RodPiece, rodPieces } from '../../src/draw/rods.ts
 import { cross, dot, type Point } from '../../src/draw/vector.ts';
 import { type View, viewFrame } from '../../src/draw/view.ts';
 import { look } from '../../src/draw/visible.ts';
-import { AXIS_SYMBOLS } from '../../src/habit/axis-symbol.ts';
-import { facePlanes } from '../../src/habit/face-planes.ts';
-import type { ClosedHabit } from '../../src/habit/habit.ts';
-import type { RodEnd, RodPlan } from '../../src/habit/rod-plan.ts';
+import { AXIS_SYMBOLS } from '../../src/rods/axis-symbol.ts';
+import type { RodEnd, RodPlan } from '../../src/rods/plan.ts';
+import { facePlanes } from '../../src/shape/face-planes.ts';
+import type { ClosedShape } from '../../src/shape/shape.ts';
 import { anyCrystal, anyView, cube, cuboctahedron, octahedron, quartz, rodsOf, tetrahedron } from './crystals.ts';
 import { contains, distanceFrom, frontDepth, prism } from './ray.ts';
 
 /** Millimetres for each unit: the cube measures 20 mm. */
 const SCALE = 10;
 
-const laidRods = (habit: ClosedHabit): RodPlan => rodsOf(habit, SCALE, { reach: 10, diameter: 2 });
+const laidRods = (shape: ClosedShape): RodPlan => rodsOf(shape, SCALE, { reach: 10, diameter: 2 });
 
-const pieces = (habit: ClosedHabit, laid: DrawnRods, view: View): RodPiece[] =>
-  rodPieces(laid, facePlanes(habit, SCALE), viewFrame(view, habit.crystal.metric));
+const pieces = (shape: ClosedShape, laid: DrawnRods, view: View): RodPiece[] =>
+  rodPieces(laid, facePlanes(shape, SCALE), viewFrame(view, shape.crystal.metric));
 
 /** Only the end of the axis that points in a direction. */
 function onlyEnd(laid: DrawnRods, [u, v, w]: readonly [number, number, number]): DrawnRods {
@@ -92,11 +92,11 @@ describe('rods seen end-on', () => {
 describe('symbols', () => {
   it('have the area of their outline times the cosine between axis and line of sight', () => {
     fc.assert(
-      fc.property(fc.constantFrom(cube, tetrahedron, quartz, octahedron), anyView, (habit, view) => {
-        const laid = laidRods(habit);
-        const { toward } = viewFrame(view, habit.crystal.metric);
+      fc.property(fc.constantFrom(cube, tetrahedron, quartz, octahedron), anyView, (shape, view) => {
+        const laid = laidRods(shape);
+        const { toward } = viewFrame(view, shape.crystal.metric);
         for (const end of laid.ends.flat()) {
-          const symbol = pieces(habit, { ...laid, ends: [[end]] }, view).find(({ kind }) => kind === 'symbol');
+          const symbol = pieces(shape, { ...laid, ends: [[end]] }, view).find(({ kind }) => kind === 'symbol');
           const cosine = dot(end.end.along, toward);
           if (Math.abs(cosine) < 1e-6) continue;
           const full = signedArea(AXIS_SYMBOLS[end.line.symbol].outline) * laid.symbolUnit ** 2;
@@ -166,12 +166,12 @@ function* numbers(seed: number): Generator<number, never> {
 }
 
 /** Draws rods, then looks at places all over them; gives those where picture and rays from the eye do not agree. */
-function disagreements(habit: ClosedHabit, laid: DrawnRods, view: View, seed: number, count: number): string[] {
-  const frame = viewFrame(view, habit.crystal.metric);
-  const planes = facePlanes(habit, SCALE);
+function disagreements(shape: ClosedShape, laid: DrawnRods, view: View, seed: number, count: number): string[] {
+  const frame = viewFrame(view, shape.crystal.metric);
+  const planes = facePlanes(shape, SCALE);
   const drawn = rodPieces(laid, planes, frame);
-  const vertices = projectAll(frame, habit.measures.positions).map(([x, y]): Point => [x * SCALE, y * SCALE]);
-  const silhouette = look(habit, frame.toward).silhouette.map((v) => vertices[v]!);
+  const vertices = projectAll(frame, shape.measures.positions).map(([x, y]): Point => [x * SCALE, y * SCALE]);
+  const silhouette = look(shape, frame.toward).silhouette.map((v) => vertices[v]!);
   const edges = [silhouette, ...drawn.map(({ outline }) => outline)];
   const solids = laid.ends.flat().map((end) => solidsOf(end, laid));
   const random = numbers(seed);
@@ -200,11 +200,11 @@ function disagreements(habit: ClosedHabit, laid: DrawnRods, view: View, seed: nu
 describe('painting in order', () => {
   it('shows at every point what a ray from the eye meets first', () => {
     fc.assert(
-      fc.property(anyCrystal, anyView, fc.nat(), fc.nat(), (habit, view, pick, seed) => {
-        const all = laidRods(habit);
+      fc.property(anyCrystal, anyView, fc.nat(), fc.nat(), (shape, view, pick, seed) => {
+        const all = laidRods(shape);
         fc.pre(all.ends.length > 0);
         const laid = { ...all, ends: [all.ends[pick % all.ends.length]!] };
-        expect(disagreements(habit, laid, view, seed, 40)).toEqual([]);
+        expect(disagreements(shape, laid, view, seed, 40)).toEqual([]);
       }),
       { numRuns: 250 },
     );
@@ -212,9 +212,9 @@ describe('painting in order', () => {
 
   it('holds for all rods of a crystal at once', () => {
     fc.assert(
-      fc.property(anyCrystal, anyView, fc.nat(), (habit, view, seed) => {
-        fc.pre(laidRods(habit).ends.length > 0);
-        expect(disagreements(habit, laidRods(habit), view, seed, 40)).toEqual([]);
+      fc.property(anyCrystal, anyView, fc.nat(), (shape, view, seed) => {
+        fc.pre(laidRods(shape).ends.length > 0);
+        expect(disagreements(shape, laidRods(shape), view, seed, 40)).toEqual([]);
       }),
       { numRuns: 60 },
     );

@@ -5,11 +5,11 @@ import { projectAll, signedArea } from '../../src/draw/project.ts';
 import { dot, type Point, vectorAt } from '../../src/draw/vector.ts';
 import { type View, viewFrame } from '../../src/draw/view.ts';
 import { type EdgeKind, look } from '../../src/draw/visible.ts';
-import type { ClosedHabit } from '../../src/habit/habit.ts';
+import type { ClosedShape } from '../../src/shape/shape.ts';
 import { anyCrystal, anyView, CRYSTALS, cube, octahedron } from './crystals.ts';
 
-const seen = (habit: ClosedHabit, view: View) => {
-  const { front, edges, silhouette } = look(habit, viewFrame(view, habit.crystal.metric).toward);
+const seen = (shape: ClosedShape, view: View) => {
+  const { front, edges, silhouette } = look(shape, viewFrame(view, shape.crystal.metric).toward);
   const of = (kind: EdgeKind): number => edges.filter((edge) => edge.kind === kind).length;
   return {
     faces: front.length,
@@ -46,8 +46,8 @@ describe('what is seen', () => {
       [1, 1, 0],
       { faces: 2, outline: 4, inner: 1, hidden: 5, endOn: 2, corners: 4 },
     ],
-  ] as const)('%s', (_, habit, [u, v, w], expected) => {
-    expect(seen(habit, { along: zone(u, v, w) })).toEqual(expected);
+  ] as const)('%s', (_, shape, [u, v, w], expected) => {
+    expect(seen(shape, { along: zone(u, v, w) })).toEqual(expected);
   });
 
   const FROM_BEHIND: Readonly<Record<EdgeKind, readonly EdgeKind[]>> = {
@@ -57,13 +57,13 @@ describe('what is seen', () => {
     'end-on': ['end-on'],
   };
 
-  it.each(CRYSTALS)('every edge of the %s is seen in one way, and in the opposite way from behind', (_, habit) => {
+  it.each(CRYSTALS)('every edge of the %s is seen in one way, and in the opposite way from behind', (_, shape) => {
     fc.assert(
       fc.property(anyView, (view) => {
-        const { toward } = viewFrame(view, habit.crystal.metric);
-        const there = look(habit, toward);
-        const behind = look(habit, [-toward[0], -toward[1], -toward[2]]);
-        expect(there.edges).toHaveLength(habit.solid.neighbour.length / 2);
+        const { toward } = viewFrame(view, shape.crystal.metric);
+        const there = look(shape, toward);
+        const behind = look(shape, [-toward[0], -toward[1], -toward[2]]);
+        expect(there.edges).toHaveLength(shape.solid.neighbour.length / 2);
         there.edges.forEach(({ kind }, i) => {
           expect(FROM_BEHIND[kind]).toContain(behind.edges[i]!.kind);
         });
@@ -75,18 +75,18 @@ describe('what is seen', () => {
   });
 });
 
-const silhouetteOf = (habit: ClosedHabit, view: View): { polygon: Point[]; toward: ReturnType<typeof vectorAt> } => {
-  const frame = viewFrame(view, habit.crystal.metric);
-  const points = projectAll(frame, habit.measures.positions);
-  return { polygon: look(habit, frame.toward).silhouette.map((v) => points[v]!), toward: frame.toward };
+const silhouetteOf = (shape: ClosedShape, view: View): { polygon: Point[]; toward: ReturnType<typeof vectorAt> } => {
+  const frame = viewFrame(view, shape.crystal.metric);
+  const points = projectAll(frame, shape.measures.positions);
+  return { polygon: look(shape, frame.toward).silhouette.map((v) => points[v]!), toward: frame.toward };
 };
 
 describe('the silhouette', () => {
   it("has half the sum of |n·v| A as its area (Cauchy's projection formula for convex bodies)", () => {
     fc.assert(
-      fc.property(anyCrystal, anyView, (habit, view) => {
-        const { polygon, toward } = silhouetteOf(habit, view);
-        const { faces, area, normals } = habit.measures;
+      fc.property(anyCrystal, anyView, (shape, view) => {
+        const { polygon, toward } = silhouetteOf(shape, view);
+        const { faces, area, normals } = shape.measures;
         const shadow = faces.reduce((sum, f) => sum + Math.abs(dot(vectorAt(normals, f), toward)) * area[f]!, 0) / 2;
         expect(signedArea(polygon) / shadow).toBeCloseTo(1, 9);
       }),
@@ -96,10 +96,10 @@ describe('the silhouette', () => {
 
   it('is convex and has every vertex inside', () => {
     fc.assert(
-      fc.property(anyCrystal, anyView, (habit, view) => {
-        const { polygon } = silhouetteOf(habit, view);
-        const points = projectAll(viewFrame(view, habit.crystal.metric), habit.measures.positions);
-        const slack = 1e-9 * habit.measures.circumscribedRadius ** 2;
+      fc.property(anyCrystal, anyView, (shape, view) => {
+        const { polygon } = silhouetteOf(shape, view);
+        const points = projectAll(viewFrame(view, shape.crystal.metric), shape.measures.positions);
+        const slack = 1e-9 * shape.measures.circumscribedRadius ** 2;
         for (const [i, [x, y]] of polygon.entries()) {
           const [nextX, nextY] = polygon[(i + 1) % polygon.length]!;
           for (const [px, py] of points)

@@ -80,7 +80,7 @@ describe.each(cases.map((one) => [one.id, one] as const))('case %s', (_, one) =>
     expect(count(solid)).toEqual({ F: expected.F, E: expected.E, V: expected.V });
     expect(vertexDegrees(solid)).toEqual(expected.vertex_degrees);
     checkSizes(solid, one);
-    expected.forms.forEach((form, f) => checkForm(solid, one, form, f));
+    for (const [f, form] of expected.forms.entries()) checkForm(solid, one, form, f);
     checkVertices(solid, one);
   });
 });

@@ -1,15 +1,7 @@
-import { readFileSync } from 'node:fs';
 import { commensurateOffsets } from '../../src/polyhedron/offset.ts';
 import type { PlaneSet } from '../../src/polyhedron/planes.ts';
-
-interface GroupsFile {
-  readonly groups: readonly { key: string; ops: readonly { W: number[]; Winv: number[] }[] }[];
-}
-
-/** Point groups as matrices: the reference file was made with spglib 2.0.2 and gemmi 0.5.7. */
-const { groups } = JSON.parse(
-  readFileSync(new URL('../outside/reference/groups.json', import.meta.url), 'utf8'),
-) as GroupsFile;
+// Point groups as matrices, made with spglib 2.0.2 and gemmi 0.5.7.
+import reference from '../outside/reference/groups.json' with { type: 'json' };
 
 export interface FormInput {
   readonly hkl: readonly number[];
@@ -27,7 +19,7 @@ const determinant = ([a, b, c, d, e, f, g, h, i]: number[]): number =>
 
 /** The planes of some forms of a point group, with the group's action on them. */
 export function crystalPlanes(key: string, forms: readonly FormInput[]): PlaneSet {
-  const ops = groups.find((group) => group.key === key)!.ops;
+  const ops = reference.groups.find((group) => group.key === key)!.ops;
   const order = ops.length;
   const number = new Map(ops.map(({ W }, i) => [text(W), i]));
   const product = Uint8Array.from(

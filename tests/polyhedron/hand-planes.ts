@@ -7,7 +7,7 @@ export type HalfSpace = readonly [number, number, number, number];
 /** Half-spaces taken at their exact double values. */
 export function planesFrom(halfSpaces: readonly HalfSpace[]): PlaneSet {
   return loosePlanes(
-    Float64Array.from(halfSpaces.flatMap(([h, k, l]) => [h, k, l])),
+    Float64Array.from(halfSpaces.flatMap((plane) => plane.slice(0, 3))),
     exactOffsets(halfSpaces.map(([, , , d]) => d)),
   );
 }

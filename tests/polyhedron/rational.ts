@@ -53,3 +53,14 @@ export function sideOf(plane: Row, [x, y, z, w]: Row): -1 | 0 | 1 {
   const value = plane[0] * x + plane[1] * y + plane[2] * z - plane[3] * w;
   return value === 0n ? 0 : value > 0n ? 1 : -1;
 }
+
+const bits = (value: bigint): number => (value < 0n ? -value : value).toString(2).length;
+
+/** A point's coordinates as doubles. */
+export function decimals([x, y, z, w]: Row): number[] {
+  return [x, y, z].map((value) => {
+    const shift = bits(w) - bits(value) + 70;
+    const whole = shift > 0 ? (value << BigInt(shift)) / w : value / (w << BigInt(-shift));
+    return Number(whole) / 2 ** shift;
+  });
+}

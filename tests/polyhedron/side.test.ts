@@ -1,10 +1,10 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { meet } from '../../src/polyhedron/meet.ts';
+import { meet } from '../../src/polyhedron/exact/meet.ts';
+import { PlaneTable } from '../../src/polyhedron/exact/plane-table.ts';
+import { exactSide } from '../../src/polyhedron/exact/side.ts';
 import { commensurateOffsets, exactOffsets, type Offset } from '../../src/polyhedron/offset.ts';
-import { PlaneTable } from '../../src/polyhedron/plane-table.ts';
 import { loosePlanes } from '../../src/polyhedron/planes.ts';
-import { exactSide } from '../../src/polyhedron/side.ts';
 import { nextDown, nextUp } from './hand-planes.ts';
 import { cornerOf, rowOf, sideOf } from './rational.ts';
 
@@ -29,7 +29,12 @@ function compare(normals: readonly Normal[], offsets: readonly Offset[]): void {
 
 const entry = (largest: number) => fc.integer({ min: -largest, max: largest });
 const normals = (largest: number) =>
-  fc.array(fc.tuple(entry(largest), entry(largest), entry(largest)), { minLength: 4, maxLength: 4 });
+  fc.array(
+    fc.tuple(entry(largest), entry(largest), entry(largest)).filter((h) => h.some((value) => value !== 0)),
+    { minLength: 4, maxLength: 4 },
+  );
+
+const fraction = fc.double({ min: -1, max: 1, noNaN: true });
 
 describe('the side of a plane at a corner, against plain rationals', () => {
   it('whole normals, commensurate offsets: meetings are common', () => {
@@ -54,9 +59,22 @@ describe('the side of a plane at a corner, against plain rationals', () => {
     );
   });
 
+  it('whole normals within the integer shortcut, offsets of several families that all but cancel', () => {
+    const nudge = fc.constantFrom(nextUp, nextDown, (value: number) => value);
+    fc.assert(
+      fc.property(normals(99), fc.tuple(fraction, fraction, fraction), nudge, (h, point, move) => {
+        const values = h.map((row) => row[0] * point[0] + row[1] * point[1] + row[2] * point[2]);
+        compare(h, exactOffsets([...values.slice(0, 3), move(values[3]!)]));
+      }),
+      RUNS,
+    );
+  });
+
   it('fractions, through a common point or a hair beside it', () => {
-    const fraction = fc.double({ min: -1, max: 1, noNaN: true });
-    const rows = fc.array(fc.tuple(fraction, fraction, fraction), { minLength: 4, maxLength: 4 });
+    const rows = fc.array(
+      fc.tuple(fraction, fraction, fraction).filter((h) => h.some((value) => value !== 0)),
+      { minLength: 4, maxLength: 4 },
+    );
     const nudge = fc.constantFrom(nextUp, nextDown, (value: number) => value);
     fc.assert(
       fc.property(rows, fc.tuple(entry(9), entry(9), entry(9)), nudge, (h, point, move) => {

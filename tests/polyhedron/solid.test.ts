@@ -3,8 +3,8 @@ import { edges, faceCorners, measure, reach } from '../../src/polyhedron/measure
 import { commensurateOffsets } from '../../src/polyhedron/offset.ts';
 import { loosePlanes } from '../../src/polyhedron/planes.ts';
 import { intersect } from '../../src/polyhedron/solid.ts';
-import { checkSolid, count, UNIT_FRAME, vertexDegrees } from './check-solid.ts';
-import { crystalPlanes } from './crystal-planes.ts';
+import { checkSolid, count, presentFaces, UNIT_FRAME, vertexDegrees } from './check-solid.ts';
+import { crystalPlanes, withoutSymmetry } from './crystal-planes.ts';
 import { cube, type HalfSpace, octahedron, planesFrom } from './hand-planes.ts';
 
 const unitSolid = (halfSpaces: readonly HalfSpace[]) => {
@@ -50,7 +50,7 @@ describe('solids known on paper', () => {
     const all = [...cube(1), ...octahedron(0)];
     const loose = intersect(
       loosePlanes(
-        Float64Array.from(all.flatMap(([h, k, l]) => [h, k, l])),
+        Float64Array.from(all.flatMap((plane) => plane.slice(0, 3))),
         commensurateOffsets(all.map((_, i) => D[i < 6 ? 0 : 1]!)),
       ),
     );
@@ -65,6 +65,27 @@ describe('solids known on paper', () => {
     const { measures } = unitSolid(cube().map(([h, k, l, d]): HalfSpace => [h, k, l, d + 10 * h - 7 * k + 5 * l]));
     expect(measures.volume).toBeCloseTo(8, 12);
     expect(measures.centroid.map(Math.round)).toEqual([10, -7, 5]);
+  });
+});
+
+describe('one call and the next', () => {
+  it('share no arrays: an earlier solid stays as it is', () => {
+    const forms = [{ hkl: [1, 0, 0], D: 1 }];
+    for (const planes of [planesFrom(cube()), crystalPlanes('m-3m', forms)]) {
+      const first = intersect(planes);
+      const before = structuredClone([first.start, first.neighbour, first.corner, first.vertices]);
+      intersect(planesFrom(octahedron(3)));
+      intersect(crystalPlanes('m-3m', [{ hkl: [3, 2, 1], D: 1 }]));
+      expect([first.start, first.neighbour, first.corner, first.vertices]).toEqual(before);
+      checkSolid(first);
+    }
+  });
+
+  it('a refused set leaves nothing behind', () => {
+    expect(() => intersect(planesFrom([...cube(), [Number.NaN, 0, 0, 1]]))).toThrow(RangeError);
+    expect(() => intersect(planesFrom([...cube(), [1, 0, 0, Number.POSITIVE_INFINITY]]))).toThrow(RangeError);
+    expect(() => intersect(planesFrom([...cube(), [0, 0, 0, 1]]))).toThrow(/normal/);
+    checkSolid(intersect(planesFrom(cube())));
   });
 });
 
@@ -106,6 +127,19 @@ describe('what is not a bounded solid', () => {
   ])('%s is %s', (_, state, halfSpaces) => {
     for (const planes of [halfSpaces, [...halfSpaces].reverse()])
       expect(intersect(planesFrom(planes)).state).toBe(state);
+  });
+
+  it('an open solid still tells its faces, though they do not hang together', () => {
+    const slab = crystalPlanes('1', [
+      { hkl: [1, 0, 0], D: 1 },
+      { hkl: [-1, 0, 0], D: 2 },
+      { hkl: [2, 0, 0], D: 3 },
+    ]);
+    for (const planes of [slab, withoutSymmetry(slab)]) {
+      const solid = intersect(planes);
+      expect(solid.state).toBe('open');
+      expect(presentFaces(solid)).toEqual([0, 1]);
+    }
   });
 
   it('measures refuse it', () => {

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { measure } from '../../src/polyhedron/measures.ts';
+import { exactOffsets } from '../../src/polyhedron/offset.ts';
 import { intersect } from '../../src/polyhedron/solid.ts';
 import { checkSolid, count, presentFaces, UNIT_FRAME, vertexDegrees } from './check-solid.ts';
 import { crystalPlanes } from './crystal-planes.ts';
@@ -95,6 +96,34 @@ describe('one unit in the last place either side of touching', () => {
   });
 });
 
+describe('one unit in the last place, with a point group', () => {
+  it.each<[string, number[], number, { F: number; E: number; V: number }]>([
+    ['octahedron outside the corners of the cube', [1, 1, 1], nextUp(3), CUBE],
+    ['octahedron that touches them', [1, 1, 1], 3, CUBE],
+    ['octahedron that cuts them', [1, 1, 1], nextDown(3), { F: 14, E: 36, V: 24 }],
+    ['dodecahedron that touches the edges', [1, 1, 0], 2, CUBE],
+    ['dodecahedron that cuts them', [1, 1, 0], nextDown(2), { F: 18, E: 48, V: 32 }],
+    ['hexoctahedron that cuts the corners', [3, 2, 1], nextDown(6), { F: 54, E: 108, V: 56 }],
+  ])('%s', (_, hkl, D, wanted) => {
+    const planes = crystalPlanes('m-3m', [
+      { hkl: [1, 0, 0], D: 1 },
+      { hkl, D },
+    ]);
+    const solid = intersect({ ...planes, offsets: exactOffsets([1, D]) });
+    checkSolid(solid);
+    expect(count(solid)).toEqual(wanted);
+  });
+});
+
+it('planes that are all but parallel: corners are where they should be', () => {
+  const nearly: HalfSpace[] = [
+    [1e-12, 0, 1, 1 + 5e-13],
+    [0, 3e-13, 1, 1 + 1e-13],
+  ];
+  checkSolid(intersect(planesFrom([...cube(), ...nearly])));
+  checkSolid(intersect(planesFrom(turned([...cube(), ...nearly], [1, 2, 3], 1))));
+});
+
 describe('sizes, order and axes', () => {
   const solid: HalfSpace[] = [...cube(), ...octahedron(2), [2, 1, 0, 2.5], [1, 1, 2, 3], [3, 1, 1, 4]];
   const reference = counts(solid);
@@ -140,6 +169,35 @@ describe('sizes, order and axes', () => {
     const upright = measure(intersect(planesFrom(solid)), UNIT_FRAME);
     expect(measure(found, UNIT_FRAME).volume).toBeCloseTo(upright.volume, 12);
     expect(count(found).V).toBeGreaterThanOrEqual(reference.V);
+  });
+
+  // Found by a long run of the property test: a search for the highest vertex went round and round between two others.
+  it('axes turned by next to nothing, with a corner whose double coordinates are worthless', () => {
+    const list: HalfSpace[] = [
+      [3, -3, -2, 1],
+      [-2, -1, 0, 1],
+      [-1, -1, 3, 1],
+      [1, 0, 1, 2],
+      [3, -2, 2, 1],
+      [2, 3, -2, 3],
+      [-3, 0, -2, 3],
+      [2, 2, -1, 1],
+      [2, 0, -3, 3],
+      [-3, -3, 3, 4],
+    ];
+    checkSolid(intersect(planesFrom(turned([...cube(3), ...list], [-3, 4, 2], -2.5819832554463385e-54))));
+  });
+
+  // Found by the property test of sizes: with corners known to 1e-10 of its length, a needle's areas were off by 1%.
+  it('a needle three hundred million times as long as wide', () => {
+    const thin = 2 ** -20;
+    const sides: HalfSpace[] = [
+      [-1, 1, 1, thin],
+      [0, 0, 1, thin],
+      [0, -1, 0, thin],
+      [1, 0, -1, thin],
+    ];
+    checkSolid(intersect(planesFrom([...cube(1024), ...sides, [0, 0, -1, 300.00000000000705]])));
   });
 
   it('forty-eight planes through one point', () => {

@@ -1,10 +1,10 @@
 import load from 'manifold-3d';
 import { beforeAll, describe, expect, it } from 'vitest';
-import { type ClosedHabit, isClosed, polyhedron } from '../../src/habit/habit.ts';
-import { millimetresPerUnit } from '../../src/habit/scale.ts';
 import { make } from '../../src/index.ts';
 import type { Mesh } from '../../src/print/mesh.ts';
 import type { RecipeInput } from '../../src/recipe/schema.ts';
+import { millimetresPerUnit } from '../../src/shape/scale.ts';
+import { type ClosedShape, isClosed, polyhedron } from '../../src/shape/shape.ts';
 
 const cuboctahedron: RecipeInput = {
   pointGroup: 'm-3m',
@@ -127,7 +127,7 @@ describe('a crystal too small for its rods', () => {
 });
 
 describe('the size', () => {
-  const habitOf = async (recipe: RecipeInput): Promise<ClosedHabit> => (await make(recipe)).habit;
+  const shapeOf = async (recipe: RecipeInput): Promise<ClosedShape> => (await make(recipe)).shape;
 
   /** The cube of distance 1 is 2 wide; its body diagonal 2√3, its face diagonal 2√2 (by hand). */
   it.each([
@@ -156,11 +156,11 @@ describe('the size', () => {
     const cos = Math.cos((alpha * Math.PI) / 180);
     const a = Math.sqrt(2 - 2 * cos);
     const c = Math.sqrt(3 + 6 * cos);
-    const one = await habitOf({ pointGroup: '-3m', cell: { a: 1, alpha }, forms: [{ face: '100', distance: 1 }] });
-    const two = await habitOf({ pointGroup: '-3m', cell: { a, c }, forms: [{ face: '10-11', distance: 1 }] });
+    const one = await shapeOf({ pointGroup: '-3m', cell: { a: 1, alpha }, forms: [{ face: '100', distance: 1 }] });
+    const two = await shapeOf({ pointGroup: '-3m', cell: { a, c }, forms: [{ face: '10-11', distance: 1 }] });
     expect(one.measures.volume).toBeCloseTo(two.measures.volume, 10);
     const size = { kind: 'scale', millimetresPerUnit: 1 } as const;
-    expect([one, two].map((habit) => isClosed(habit) && millimetresPerUnit(habit, size))).toEqual([1, 1]);
+    expect([one, two].map((shape) => isClosed(shape) && millimetresPerUnit(shape, size))).toEqual([1, 1]);
     for (let i = 0; i < 3; i++) expect(one.measures.high[i]).toBeCloseTo(two.measures.high[i]!, 10);
     expect(polyhedron(one.crystal).openAlong).toEqual([]);
   });

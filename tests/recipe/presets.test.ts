@@ -5,12 +5,12 @@ import { form } from '../../src/crystal/form.ts';
 import { parseFace, readOptions } from '../../src/crystal/indices.ts';
 import { pointGroup } from '../../src/crystal/point-group.ts';
 import { PRESET_FOLDER } from '../../src/disk/preset-folder.ts';
-import { isClosed, polyhedron } from '../../src/habit/habit.ts';
 import type { Crystal } from '../../src/recipe/crystal.ts';
 import { read } from '../../src/recipe/read.ts';
 import { mineralSchema, printerSchema, recipeSchema, setSchema } from '../../src/recipe/schema.ts';
 import { type PresetKind, presetRecipe } from '../../src/recipe/shelf.ts';
 import { readText } from '../../src/recipe/text.ts';
+import { isClosed, polyhedron } from '../../src/shape/shape.ts';
 import { referenceGroups, referenceKinds, standardForms } from '../outside/reference/read.ts';
 
 const LOOKS = 'Distances are chosen for looks, not measured.';
@@ -108,7 +108,7 @@ describe('the sets', () => {
     '$id/$key closes, shows its form first and foremost, and names its helpers',
     ({ id, key, recipe }) => {
       expect(key).toMatch(/^[a-z0-9_-]+$/);
-      expect(recipeSchema.parse(presetRecipe(PRESET_FOLDER, `${id}/${key}`).value)).toEqual(recipe);
+      expect(recipeSchema.parse(presetRecipe(PRESET_FOLDER, `${id}/${key}`).value)).toMatchObject(recipe);
       const crystal = crystalOf(recipe);
       const [main, ...helpers] = crystal.forms;
       const parts = shares(crystal);

@@ -1,5 +1,5 @@
 import { FileError } from '../file-error.ts';
-import { FloatList } from '../mesh/float-list.ts';
+import { FloatList } from './float-list.ts';
 import type { Facets } from './layout.ts';
 import { StlTokens } from './tokens.ts';
 

@@ -1,4 +1,4 @@
-import { type Fraction, fractionOf } from './offset.ts';
+import { type Fraction, fractionOf } from '../offset.ts';
 
 /**
  * The last resort: planes and corners in whole numbers of any size. Slow, never wrong, and asked only where doubles

@@ -1,4 +1,4 @@
-import { PLANE } from './plane-table.ts';
+import { PLANE, type PlaneTable } from './plane-table.ts';
 import { ULP } from './side.ts';
 
 /** Numbers kept for a corner: x, y, z and the bound of their error. */
@@ -44,4 +44,13 @@ export function meet(rows: Float64Array, a: number, b: number, c: number, out: F
   const determinant = 6 * na * nb * nc;
   const certain = Math.abs(det) - 8 * ULP * determinant;
   out[at + 3] = certain > 0 ? (8 * ULP * (numerator + reach * determinant)) / certain : Number.POSITIVE_INFINITY;
+}
+
+/**
+ * The error above which a vertex is worked out exactly before it is handed out. A solid around the origin is about as
+ * thin as its nearest plane is near, and even a needle is to have good areas and angles; of others the width is unknown.
+ * @param reach the largest coordinate
+ */
+export function tolerableError({ nearest }: PlaneTable, reach: number): number {
+  return nearest > 0 ? 2 ** -34 * Math.min(nearest, reach) : 2 ** -44 * reach;
 }

@@ -1,6 +1,6 @@
+import { doubleOffset, LARGEST_MULTIPLE, type Offset } from '../offset.ts';
+import type { PlaneSet } from '../planes.ts';
 import { type BigRow, bigRow } from './big.ts';
-import { doubleOffset, LARGEST_MULTIPLE, type Offset } from './offset.ts';
-import type { PlaneSet } from './planes.ts';
 import { bytes, doubles, withRoom } from './room.ts';
 
 /** Normals of whole numbers up to this are multiplied out exactly in doubles: 6·999³·2^18·4 < 2^53. */
@@ -17,6 +17,8 @@ export class PlaneTable {
   rows = doubles(PLANE * 64);
   /** 1 where the integer shortcut holds: whole normals within bounds and a small multiple. */
   whole = bytes(64);
+  /** Distance of the nearest plane from the origin, in index space and give or take a factor of √3. */
+  nearest = 0;
   private set: PlaneSet | null = null;
   private frame: Offset = doubleOffset(1, -1);
   /** Planes that were needed in whole numbers of any size. */
@@ -33,6 +35,7 @@ export class PlaneTable {
     this.big.clear();
     let largest = 1;
     let farthest = 0;
+    let nearest = Number.POSITIVE_INFINITY;
     let allWhole = true;
     for (let p = 0; p < count; p++) {
       const { approximate, multiple } = offsets[form[p]!]!;
@@ -42,9 +45,11 @@ export class PlaneTable {
       allWhole &&= isWhole;
       largest = Math.max(largest, size);
       farthest = Math.max(farthest, Math.abs(approximate));
+      nearest = Math.min(nearest, approximate / size);
       if (size === 0) throw new RangeError('A plane needs a normal that is not 0, 0, 0.');
     }
     if (!Number.isFinite(largest + farthest)) throw new RangeError('A plane needs finite numbers.');
+    this.nearest = nearest;
     // By Cramer's rule with a determinant of at least 1, no coordinate of a corner exceeds 6·largest²·farthest.
     this.putFrame((allWhole ? 12 * largest * largest : 2 ** 40) * (farthest || 1));
     return this;

@@ -1,5 +1,5 @@
+import type { Offset } from '../offset.ts';
 import { bigCross, bigMeet, bigSide, bigTriple } from './big.ts';
-import type { Offset } from './offset.ts';
 import { PLANE, type PlaneTable } from './plane-table.ts';
 
 /** Half a unit in the last place of 1: every float operation errs by at most this, relatively. */

@@ -1,0 +1,56 @@
+import { nearest } from '../crystal/nearest.ts';
+import type { PointGroup } from '../crystal/point-group.ts';
+import type { PrintPlan } from './crystal.ts';
+import { readAxes, readSize } from './print-plan.ts';
+import type { ProblemList } from './problem-list.ts';
+import type { PrinterProfile, RecipeInput } from './schema.ts';
+import { either, preset, type Shelf } from './shelf.ts';
+
+const USUAL_PRINTER = 'fdm-0.4';
+
+/** The recipe's `print`; undefined when something in it is wrong. */
+export function readPrint(
+  { print = {} }: RecipeInput,
+  group: PointGroup | undefined,
+  shelf: Shelf,
+  problems: ProblemList,
+): PrintPlan | undefined {
+  const { size: wanted, axes: chosen, file: name } = print;
+  const printer = readPrinter(print.printer ?? USUAL_PRINTER, shelf, problems);
+  const size = wanted === undefined ? null : problems.attempt('size', ['print', 'size'], () => readSize(wanted, group));
+  const rod = (printer ?? FALLBACK_PRINTER).rod;
+  const axes =
+    chosen === undefined
+      ? null
+      : problems.attempt('axes', ['print', 'axes'], () => readAxes(chosen, group, rod.diameter));
+  const file = name === undefined ? null : readFileName(name, problems);
+  if (!printer || size === undefined || axes === undefined || file === undefined) return undefined;
+  return { size, axes, printer, stl: print.stl ?? 'binary', file };
+}
+
+function readPrinter(name: string, shelf: Shelf, problems: ProblemList): PrinterProfile | undefined {
+  const profile = preset(shelf, 'printers', name);
+  if (profile) return profile;
+  const known = shelf.list('printers');
+  if (known.length === 0) return FALLBACK_PRINTER;
+  const [guess] = nearest(name, known, 1);
+  const hint = `${guess ? `Did you mean ${guess}? ` : ''}There are ${either(known, 'and')}.`;
+  problems.say('unknown-printer', ['print', 'printer'], `no printer profile "${name}"`, hint);
+  return undefined;
+}
+
+/** What a recipe is read with where no printer profiles are at hand: an ordinary filament printer, 0.4 mm nozzle. */
+const FALLBACK_PRINTER: PrinterProfile = {
+  name: 'Filament printer, 0.4 mm nozzle',
+  source: 'start values of presets/printers/fdm-0.4.yaml',
+  bed: [220, 220, 250],
+  wall: 0.8,
+  rod: { diameter: 3, smallest: 1.8, clearance: 0.2 },
+};
+
+function readFileName(name: string, problems: ProblemList): string | undefined {
+  if (/^[\p{L}\p{N}][\p{L}\p{N} ._-]{0,99}$/u.test(name) && !/[. ]$/.test(name)) return name;
+  const hint = 'Use letters, digits, blanks, - and _; a name has no folder in it.';
+  problems.say('file-name', ['print', 'file'], `"${name}" cannot be a file name here`, hint);
+  return undefined;
+}
