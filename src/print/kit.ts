@@ -29,6 +29,8 @@ export async function withSolids<T>(work: (bench: Workbench) => T): Promise<T> {
 /** The few solid operations that printable parts need. Lengths in millimetres. */
 export class Workbench {
   private readonly made: { delete(): void }[] = [];
+  /** Surface numbers by the identities that the library carries through its operations. */
+  private readonly surfaceOf = new Map<number, number>();
 
   constructor(private readonly kit: ManifoldToplevel) {}
 
@@ -41,12 +43,20 @@ export class Workbench {
     return thing;
   }
 
-  /** @throws Error when the mesh is no closed solid */
-  solid({ positions, triangles }: Mesh): Manifold {
+  /** Surfaces of the mesh are remembered through all later operations. @throws Error when it is no closed solid */
+  solid({ positions, triangles, surface }: Mesh): Manifold {
+    const options = { numProp: 3, vertProperties: Float32Array.from(positions) };
+    if (!surface) return this.keep(new this.kit.Manifold(new this.kit.Mesh({ ...options, triVerts: triangles })));
+    const count = surface.reduce((most, one) => Math.max(most, one), 0) + 1;
+    const first = this.kit.Manifold.reserveIDs(count);
+    const order = Array.from(surface.keys()).sort((s, t) => surface[s]! - surface[t]!);
+    const runs = Array.from({ length: count }, (_, run) => run).filter((run) => surface.includes(run));
+    for (const run of runs) this.surfaceOf.set(first + run, run);
     const mesh = new this.kit.Mesh({
-      numProp: 3,
-      vertProperties: Float32Array.from(positions),
-      triVerts: Uint32Array.from(triangles),
+      ...options,
+      triVerts: Uint32Array.from(order.flatMap((t) => [...triangles.subarray(3 * t, 3 * t + 3)])),
+      runIndex: Uint32Array.from([...runs, count].map((run) => 3 * order.filter((t) => surface[t]! < run).length)),
+      runOriginalID: Uint32Array.from(runs, (run) => first + run),
     });
     return this.keep(new this.kit.Manifold(mesh));
   }
@@ -71,13 +81,22 @@ export class Workbench {
     return this.keep(solid.transform(matrix));
   }
 
-  /** The finished mesh, without edges that are too short for single precision. */
-  mesh(solid: Manifold): Mesh {
-    const { vertProperties, triVerts, numProp } = this.keep(solid.simplify(SHORTEST_EDGE)).getMesh();
+  /**
+   * The finished mesh, without edges that are too short for single precision.
+   * @param other the surface of what came from no mesh with surfaces: rods, the insides of bores
+   */
+  mesh(solid: Manifold, other: number): Mesh {
+    const { vertProperties, triVerts, numProp, runIndex, runOriginalID } = this.keep(
+      solid.simplify(SHORTEST_EDGE),
+    ).getMesh();
     const positions = new Float64Array((vertProperties.length / numProp) * 3);
     for (let v = 0; v * 3 < positions.length; v++)
       positions.set(vertProperties.subarray(v * numProp, v * numProp + 3), 3 * v);
-    const mesh = withoutShortEdges({ positions, triangles: Uint32Array.from(triVerts) }, SHORTEST_EDGE);
+    const surface = new Uint16Array(triVerts.length / 3).fill(other);
+    runOriginalID.forEach((id, run) => {
+      surface.fill(this.surfaceOf.get(id) ?? other, runIndex[run]! / 3, runIndex[run + 1]! / 3);
+    });
+    const mesh = withoutShortEdges({ positions, triangles: Uint32Array.from(triVerts), surface }, SHORTEST_EDGE);
     const off = Math.abs(meshVolume(mesh) / solid.volume() - 1);
     if (!(off < VOLUME_TOLERANCE)) throw new Error(`A part lost ${off} of its volume while its mesh was tidied.`);
     return mesh;

@@ -4,6 +4,8 @@ export interface Mesh {
   readonly positions: Float64Array;
   /** Three vertex numbers a triangle. */
   readonly triangles: Uint32Array;
+  /** For each triangle the number of the surface it belongs to, in the part's list; absent where nothing tells them apart. */
+  readonly surface?: Uint16Array;
 }
 
 /** Volume that a closed mesh encloses, mm³; cavities, whose triangles are turned inwards, subtract. */

@@ -6,10 +6,19 @@ export interface Part {
   readonly name: string;
   /** What it is for, in words. */
   readonly purpose: string;
+  /** What the numbers in the mesh's `surface` mean. */
+  readonly surfaces: readonly Surface[];
   /** As it lies on the bed. */
   readonly mesh: Mesh;
   /** Where each copy sits in the finished object; one mesh a copy. */
   readonly placed: readonly Mesh[];
+}
+
+/** A set of triangles of one meaning: the faces of a form, a rod, a cut. */
+export interface Surface {
+  readonly name: string;
+  /** #RRGGBB, sRGB. */
+  readonly colour: string;
 }
 
 /** All parts in their places as one mesh. Its solids stay separate where the parts are. */
@@ -41,8 +50,5 @@ export function ontoBed(meshes: readonly Mesh[]): Mesh[] {
       return own;
     }, Number.POSITIVE_INFINITY),
   );
-  return meshes.map(({ positions, triangles }) => ({
-    positions: positions.map((value, i) => value - low[i % 3]!),
-    triangles,
-  }));
+  return meshes.map((mesh) => ({ ...mesh, positions: mesh.positions.map((value, i) => value - low[i % 3]!) }));
 }

@@ -5,9 +5,11 @@ import { planRods, type RodPlan } from '../rods/plan.ts';
 import type { ClosedShape } from '../shape/shape.ts';
 import { crystalMesh } from './body.ts';
 import { withSolids } from './kit.ts';
-import { ontoBed, type Part } from './part.ts';
+import type { Mesh } from './mesh.ts';
+import { ontoBed, type Part, type Surface } from './part.ts';
 import { fuseRods } from './rods/fused.ts';
 import { boreForRods } from './rods/separate.ts';
+import { crystalSurfaces } from './surfaces.ts';
 
 export interface PrintedModel {
   readonly parts: readonly Part[];
@@ -22,26 +24,31 @@ export async function printedParts(
   { axes, printer }: PrintPlan,
 ): Promise<PrintedModel> {
   const crystal = crystalMesh(shape, scale);
-  if (!axes) return { parts: [bodyPart('the crystal', crystal)], remarks: [] };
+  const surfaces = crystalSurfaces(shape.crystal, axes?.fit === 'separate' ? 'bores' : 'rods');
+  const other = surfaces.length - 1;
+  if (!axes) return { parts: [bodyPart('the crystal', crystal, surfaces)], remarks: [] };
   const plan = planRods(shape, scale, axes);
-  if (plan.ends.length === 0) return { parts: [bodyPart('the crystal', crystal)], remarks: plan.remarks };
+  if (plan.ends.length === 0) return { parts: [bodyPart('the crystal', crystal, surfaces)], remarks: plan.remarks };
   const thin = thinRods(plan, printer);
   return withSolids((bench) => {
     const body = bench.solid(crystal);
     if (axes.fit === 'fused') {
-      const mesh = bench.mesh(fuseRods(bench, body, plan));
-      return { parts: [bodyPart('the crystal with its symmetry axes', mesh)], remarks: [...plan.remarks, ...thin] };
+      const mesh = bench.mesh(fuseRods(bench, body, plan), other);
+      return {
+        parts: [bodyPart('the crystal with its symmetry axes', mesh, surfaces)],
+        remarks: [...plan.remarks, ...thin],
+      };
     }
     const bored = boreForRods(bench, body, plan, printer.rod.clearance);
     return {
-      parts: [bodyPart('the crystal, bored for its rods', bench.mesh(bored.body)), ...bored.rods],
+      parts: [bodyPart('the crystal, bored for its rods', bench.mesh(bored.body, other), surfaces), ...bored.rods],
       remarks: [...plan.remarks, ...bored.remarks, ...thin],
     };
   });
 }
 
-function bodyPart(purpose: string, mesh: Part['mesh']): Part {
-  return { name: 'body', purpose, mesh: ontoBed([mesh])[0]!, placed: [mesh] };
+function bodyPart(purpose: string, mesh: Mesh, surfaces: readonly Surface[]): Part {
+  return { name: 'body', purpose, surfaces, mesh: ontoBed([mesh])[0]!, placed: [mesh] };
 }
 
 function thinRods({ ends, diameter, symbolUnit }: RodPlan, { name, rod, wall }: PrinterProfile): string[] {

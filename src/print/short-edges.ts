@@ -4,7 +4,8 @@ import type { Mesh } from './mesh.ts';
  * Draws the ends of edges shorter than `limit` together. Where a tool's side passes a corner of the crystal within
  * rounding, the boolean library leaves edges of a millionth of a millimetre, which single precision can fold over.
  */
-export function withoutShortEdges({ positions, triangles }: Mesh, limit: number): Mesh {
+export function withoutShortEdges(mesh: Mesh, limit: number): Mesh {
+  const { positions, triangles, surface } = mesh;
   const merged = Uint32Array.from({ length: positions.length / 3 }, (_, vertex) => vertex);
   const find = (vertex: number): number => {
     let root = vertex;
@@ -25,13 +26,16 @@ export function withoutShortEdges({ positions, triangles }: Mesh, limit: number)
     merged[Math.max(a, b)] = Math.min(a, b);
     found = true;
   }
-  if (!found) return { positions, triangles };
+  if (!found) return mesh;
   const kept: number[] = [];
+  const keptSurface: number[] = [];
   for (let t = 0; t < triangles.length; t += 3) {
     const [a, b, c] = [find(triangles[t]!), find(triangles[t + 1]!), find(triangles[t + 2]!)];
-    if (a !== b && b !== c && c !== a) kept.push(a, b, c);
+    if (a === b || b === c || c === a) continue;
+    kept.push(a, b, c);
+    if (surface) keptSurface.push(surface[t / 3]!);
   }
-  return usedOnly(positions, kept);
+  return { ...usedOnly(positions, kept), ...(surface && { surface: Uint16Array.from(keptSurface) }) };
 }
 
 /** Vertices that no triangle uses would count in the model's extents. */

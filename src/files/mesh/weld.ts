@@ -14,18 +14,21 @@ export function weldFloat32(mesh: Mesh): Mesh {
   const { numbers, firsts } = numberRows(new Int32Array(rounded.buffer), 3);
   const triangles = new Uint32Array(mesh.triangles.length);
   const used = new Uint8Array(firsts.length);
+  const surface = mesh.surface && new Uint16Array(mesh.surface.length);
   let end = 0;
   for (let i = 0; i < triangles.length; i += 3) {
     const a = numbers[mesh.triangles[i]!]!;
     const b = numbers[mesh.triangles[i + 1]!]!;
     const c = numbers[mesh.triangles[i + 2]!]!;
     if (a === b || b === c || c === a) continue;
+    if (surface) surface[end / 3] = mesh.surface![i / 3]!;
     triangles[end++] = a;
     triangles[end++] = b;
     triangles[end++] = c;
     used[a] = used[b] = used[c] = 1;
   }
-  return keepUsed(rounded, firsts, triangles.slice(0, end), used);
+  const welded = keepUsed(rounded, firsts, triangles.slice(0, end), used);
+  return surface ? { ...welded, surface: surface.slice(0, end / 3) } : welded;
 }
 
 /** The vertices in use under new numbers; writes these into `triangles`, which must be a fresh array. */

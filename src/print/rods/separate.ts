@@ -6,6 +6,7 @@ import { COLLAR, GAP, type RodEnd, type RodPlan } from '../../rods/plan.ts';
 import { ObjectError } from '../../shape/object-error.ts';
 import type { Workbench } from '../kit.ts';
 import { ontoBed, type Part } from '../part.ts';
+import { ROD_COLOUR } from '../surfaces.ts';
 import { boreOutline, HOLLOW_DEPTH, rodOutline, terminal, toEnd } from './solid.ts';
 
 /** Plastic left between two bores that meet near the centre, millimetres. */
@@ -98,8 +99,15 @@ function halfParts(bench: Workbench, halves: readonly { end: RodEnd; from: numbe
 }
 
 function part(bench: Workbench, name: string, purpose: string, solid: Manifold, ends: readonly AxisEnd[]): Part {
-  const [mesh] = ontoBed([bench.mesh(bench.place(solid, UPSIDE_DOWN))]);
-  return { name, purpose, mesh: mesh!, placed: ends.map((end) => bench.mesh(bench.place(solid, toEnd(end)))) };
+  const [mesh] = ontoBed([bench.mesh(bench.place(solid, UPSIDE_DOWN), 0)]);
+  const surfaces = [{ name, colour: ROD_COLOUR }];
+  return {
+    name,
+    purpose,
+    surfaces,
+    mesh: mesh!,
+    placed: ends.map((end) => bench.mesh(bench.place(solid, toEnd(end)), 0)),
+  };
 }
 
 /** Rods are printed standing on their symbol. */
