@@ -15,7 +15,7 @@ const MAY_IMPORT: Readonly<Record<string, readonly string[]>> = {
   print: ['crystal', 'polyhedron', 'recipe', 'shape', 'rods'],
   files: ['print'],
   draw: ['crystal', 'polyhedron', 'recipe', 'shape', 'rods'],
-  disk: ['recipe'],
+  disk: ['crystal', 'recipe'],
   door: ['crystal', 'polyhedron', 'recipe', 'shape', 'rods', 'print', 'files', 'draw', 'disk'],
   cli: ['crystal', 'polyhedron', 'recipe', 'shape', 'rods', 'print', 'files', 'draw', 'disk', 'door'],
 };

@@ -6,6 +6,7 @@ import { closedOrThrow } from '../shape/closing.ts';
 import { millimetresPerUnit } from '../shape/scale.ts';
 import { polyhedron } from '../shape/shape.ts';
 import { type LookFlags, lookFrom, viewFrom } from './draw-options.ts';
+import { helperForms } from './draw-sheet.ts';
 import { type PrintFlags, printFlags } from './print-flags.ts';
 import { recipeFrom } from './recipe-input.ts';
 
@@ -21,6 +22,7 @@ export async function drawing(recipe: string, flags: LookFlags & PrintFlags): Pr
   const svg = drawCrystal(shape, {
     ...look,
     view,
+    helpers: helperForms(recipe, crystal),
     ...(print.axes && { axes: planRods(shape, scale, print.axes) }),
     ...(sized && { millimetresPerUnit: scale }),
   });

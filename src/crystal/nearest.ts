@@ -14,10 +14,14 @@ function editDistance(from: string, to: string): number {
 
 /**
  * The candidates at the smallest edit distance from the word, in their own order, at most `limit` of them; none when
- * even the nearest shares too little with it to be what was meant.
+ * even the nearest shares too little with it to be what was meant. Case does not count.
  */
 export function nearest(word: string, candidates: Iterable<string>, limit = 4): string[] {
-  const measured = [...candidates].map((candidate) => ({ candidate, distance: editDistance(word, candidate) }));
+  const plain = word.toLowerCase();
+  const measured = [...candidates].map((candidate) => ({
+    candidate,
+    distance: editDistance(plain, candidate.toLowerCase()),
+  }));
   const best = Math.min(...measured.map(({ distance }) => distance));
   if (best > Math.max(2, Math.floor(word.length / 3))) return [];
   return measured

@@ -2,7 +2,7 @@ import { constants } from 'node:fs';
 import { access, open, readdir, stat } from 'node:fs/promises';
 import { basename, dirname } from 'node:path';
 import { DiskError, diskErrorOf, systemCode } from './disk-error.ts';
-import { nearestName } from './nearest-name.ts';
+import { nearest } from '../crystal/nearest.ts';
 
 export { decodeText } from './decode-text.ts';
 
@@ -79,7 +79,7 @@ async function notFound(path: string, cause: unknown): Promise<DiskError> {
     const what = `Cannot read ${path}: the folder ${folder} does not exist or cannot be looked into.`;
     return new DiskError('notFound', `${what} Check the spelling of the path.`, cause);
   }
-  const nearest = nearestName(basename(path), names);
-  const advice = nearest === undefined ? 'Check the spelling of the path.' : `Did you mean ${nearest}?`;
+  const [guess] = nearest(basename(path), names, 1);
+  const advice = guess === undefined ? 'Check the spelling of the path.' : `Did you mean ${guess}?`;
   return new DiskError('notFound', `Cannot read ${path}: there is no such file. ${advice}`, cause);
 }

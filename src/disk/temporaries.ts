@@ -4,7 +4,7 @@ import { unlinkSync } from 'node:fs';
 const live = new Set<string>();
 let made = 0;
 
-/** A hidden name that no other call and no other running process uses; the file counts as live from now on. */
+/** A hidden name that no other call and no other running process uses. `addTemporary` makes the file count as live. */
 export function temporaryName(): string {
   return `.goniolith-${process.pid}-${++made}.part`;
 }

@@ -4,23 +4,27 @@ import { FAINT, INK, PAPER } from './palette.ts';
 import { closedPath, element, svgPage } from './svg.ts';
 import { layOutSymbol, symbolText, words } from './symbol-text.ts';
 
-const ORDER: readonly RodSymbol[] = ['2', '3', '4', '6', '-3', '2/m', '-4', '4/m', '-6', '6/m'];
-const COLUMNS = 5;
-const CELL = { width: 150, height: 168 };
+/** A column for each order: its rotation axis, rotoinversion axis, and the axis with a mirror across. */
+const COLUMNS: readonly (readonly RodSymbol[])[] = [
+  ['2', '2/m'],
+  ['3', '-3'],
+  ['4', '-4', '4/m'],
+  ['6', '-6', '6/m'],
+];
+const CELL = { width: 170, height: 164 };
+const MARGIN = 20;
 /** Pixels for one rod diameter. */
 const UNIT = 18;
 
 /** The key to the symbols in which rods end, as SVG. */
 export function axisKey(): string {
-  const cells = ORDER.map((symbol, i) => {
-    const left = 20 + (i % COLUMNS) * CELL.width;
-    const top = 20 + Math.floor(i / COLUMNS) * CELL.height;
-    return cell(symbol, left + CELL.width / 2, top);
-  });
-  const rows = Math.ceil(ORDER.length / COLUMNS);
+  const cells = COLUMNS.flatMap((symbols, column) =>
+    symbols.map((symbol, row) => cell(symbol, MARGIN + (column + 0.5) * CELL.width, MARGIN + row * CELL.height)),
+  );
+  const rows = Math.max(...COLUMNS.map((symbols) => symbols.length));
   const page = {
-    width: 40 + COLUMNS * CELL.width,
-    height: 30 + rows * CELL.height,
+    width: 2 * MARGIN + COLUMNS.length * CELL.width,
+    height: MARGIN + 10 + rows * CELL.height,
     title: 'Key to the symbols of symmetry axes',
     ground: PAPER,
   };
@@ -29,9 +33,10 @@ export function axisKey(): string {
 
 function cell(symbol: RodSymbol, middle: number, top: number): string {
   const { outline, hollow, island } = AXIS_SYMBOLS[symbol];
+  // A symbol's x axis, to which its lens and its triangle point, stands upright here.
   const shape = (points: Outline, fill: string): string =>
     element('path', {
-      d: closedPath(points.map(([x, y]) => [middle + UNIT * x, top + 56 - UNIT * y])),
+      d: closedPath(points.map(([x, y]) => [middle - UNIT * y, top + 56 - UNIT * x])),
       fill,
       stroke: INK,
       'stroke-width': 1.2,

@@ -1,76 +1,96 @@
-import { OVERBAR } from '../crystal/marks.ts';
 import { printSymbol } from '../crystal/symbol.ts';
 import type { ClosedShape } from '../shape/shape.ts';
+import { firstLines } from './break-lines.ts';
 import { figure, type LineWeights } from './figure.ts';
+import { titled } from './heading.ts';
+import { lineText } from './line-text.ts';
 import { FAINT, PAPER, RULE } from './palette.ts';
 import { fitInto } from './project.ts';
+import { sheetColumns } from './sheet-columns.ts';
 import { element, linePath, svgPage } from './svg.ts';
-import { layOutSymbol, symbolText, words } from './symbol-text.ts';
+import { layOutSymbol, symbolText } from './symbol-text.ts';
 import type { Point } from './vector.ts';
 import type { View } from './view.ts';
+import { viewWords } from './view-words.ts';
 
 export interface SheetEntry {
   readonly shape: ClosedShape;
+  /** Digits with U+0305 after them get drawn overbars, here and in the further line. */
   readonly caption: string;
-  /** A further line; digits with U+0305 after them get drawn overbars. */
   readonly subcaption?: string;
+  /** Numbers of the forms that only close what the others leave open; none by default. */
+  readonly helpers?: readonly number[];
 }
 
 export interface SheetOptions {
-  /** As many as make the sheet about square by default. */
+  /** By default as many as fill the last row well, at most ten. */
   readonly columns?: number;
+  /** Above, over the number of crystals and the view. */
   readonly title?: string;
   readonly view?: View;
   readonly style?: 'tinted' | 'lines';
-  /** Edges behind the bodies: left out by default. */
+  /** Edges behind the bodies: by default thin for those of fewer than seven faces, which need them, else left out. */
   readonly hidden?: 'thin' | 'none';
   readonly ground?: 'paper' | 'none';
 }
 
-const CELL = 156;
-const BOX = 118;
+const CELL = 168;
+const BOX = 126;
+/** Above and beside the box. */
+const INSET = (CELL - BOX) / 2;
 const MARGIN = 28;
-const TITLE = 54;
-const WEIGHTS: LineWeights = { outline: 1.4, inner: 0.9, hidden: 0.6 };
-const LINE = 16;
-/** All captions have one type size, the one that the longest needs; those that would need less than this, their own. */
-const CAPTION = 13;
-const SMALLEST_COMMON = 11;
+const ABOVE_TITLE = 14;
+const UNDER_TITLE = 26;
+const WEIGHTS: LineWeights = { outline: 1.4, inner: 0.9, hidden: 0.85 };
+/** Type sizes and distances of baselines: every caption is set the same. */
+const CAPTION = { size: 16, line: 18, most: 3 };
+const SMALL = { size: 13.5, line: 17, most: 2 };
+const UNDER_PICTURE = 22;
+const UNDER_WORDS = 16;
+/** Room for words in a cell, pixels. */
+const WORDS = CELL - 14;
+/** Solids with fewer faces look like another one when only their front is drawn. */
+const FEW_FACES = 7;
 
 /**
  * Many small drawings on one page, each as large as its box allows, with name and point group below.
  * @throws RangeError without entries, or for a number of columns that is not a whole positive one
  */
 export function contactSheet(entries: readonly SheetEntry[], options: SheetOptions = {}): string {
-  if (entries.length === 0) throw new RangeError('A contact sheet needs at least one crystal.');
-  const { columns = Math.ceil(Math.sqrt(entries.length)), title, ground = 'paper' } = options;
+  const [first] = entries;
+  if (!first) throw new RangeError('A contact sheet needs at least one crystal.');
+  const { columns = sheetColumns(entries.length), title, view = 'general', ground = 'paper' } = options;
   if (!(Number.isInteger(columns) && columns > 0))
     throw new RangeError(`A sheet cannot have ${columns} columns; give a whole number from 1.`);
-  const rows = Math.ceil(entries.length / columns);
-  const rowHeight = (CELL + BOX) / 2 + LINE * (entries.some(({ subcaption }) => subcaption) ? 3 : 2) + 14;
-  const captionSize = Math.max(SMALLEST_COMMON, Math.min(...entries.map(({ caption }) => sizeFor(caption, CAPTION))));
-  const top = MARGIN + (title === undefined ? 0 : TITLE);
+  const cells = entries.map((entry) => ({ ...entry, lines: cellLines(entry) }));
+  const rowCount = Math.ceil(entries.length / columns);
   const width = 2 * MARGIN + columns * CELL;
+  const count = entries.length === 1 ? 'one crystal' : `${entries.length} crystals`;
+  const remarks = [...(title === undefined ? [] : [count]), viewWords(view, first.shape.crystal.group.axes)];
+  const heading = titled(title ?? capital(count), null, remarks, width - 2 * MARGIN - 8);
+  const tops = [Math.round(ABOVE_TITLE + heading.height + UNDER_TITLE)];
+  for (let row = 0; row < rowCount; row++)
+    tops.push(tops[row]! + rowHeight(cells.slice(row * columns, (row + 1) * columns)));
   const page = {
     width,
-    height: top + rows * rowHeight + MARGIN,
-    title: title ?? `${entries.length} crystals`,
+    height: tops[rowCount]! + MARGIN,
+    title: title ?? count,
     ground: ground === 'paper' ? PAPER : null,
   };
   return svgPage(page, [
-    title === undefined ? '' : words(title, { at: [MARGIN + 8, MARGIN + 28], size: 25 }),
-    rules(
-      width,
-      Array.from({ length: rows + 1 }, (_, row) => top + row * rowHeight),
-    ),
-    ...entries.map((entry, i) =>
-      cell(entry, [MARGIN + (i % columns) * CELL, top + Math.floor(i / columns) * rowHeight], {
-        ...options,
-        captionSize,
-      }),
+    heading.paint([MARGIN + 4, ABOVE_TITLE]),
+    rules(width, tops),
+    ...cells.map((cell, i) =>
+      paintCell(cell, [MARGIN + (i % columns) * CELL, tops[Math.floor(i / columns)]!], options),
     ),
   ]);
 }
+
+/** Room for the words of the fullest cell. */
+const rowHeight = (cells: readonly { readonly lines: readonly CellLine[] }[]): number =>
+  INSET + BOX + Math.max(...cells.map(({ lines }) => lines.at(-1)!.below)) + UNDER_WORDS;
+
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 
 const rules = (width: number, heights: readonly number[]): string =>
   element('path', {
@@ -84,34 +104,46 @@ const rules = (width: number, heights: readonly number[]): string =>
     'stroke-width': 1,
   });
 
-interface Layout extends SheetOptions {
-  readonly captionSize: number;
+interface CellLine {
+  readonly text: string;
+  readonly kind: 'caption' | 'group' | 'remark';
+  /** Distance of its baseline from the foot of the box. */
+  readonly below: number;
 }
 
-function cell({ shape, caption, subcaption }: SheetEntry, [x, y]: Point, options: Layout): string {
-  const { view = 'general', style = 'tinted', hidden = 'none' } = options;
-  const inset = (CELL - BOX) / 2;
-  const picture = figure(shape, { view, style, hidden, labels: 'none', weights: WEIGHTS, rods: null });
-  const placement = fitInto(picture.bounds, { x: x + inset, y: y + inset, width: BOX, height: BOX });
-  const middle = x + CELL / 2;
-  const under = y + inset + BOX + LINE + 6;
-  return [
-    picture.paint(placement),
-    words(caption, { at: [middle, under], size: sizeFor(caption, options.captionSize), anchor: 'middle' }),
-    line(printSymbol(shape.crystal.group.hermannMauguin), [middle, under + LINE]),
-    subcaption ? line(subcaption, [middle, under + 2 * LINE]) : '',
-  ].join('\n');
+/** The words of a cell from the top: its caption, the point group and the further line. */
+function cellLines({ shape, caption, subcaption }: SheetEntry): CellLine[] {
+  const broken = (text: string, { size, most }: typeof CAPTION) => firstLines(text, WORDS / size, most);
+  const lines = [
+    ...broken(caption, CAPTION).map((text) => ({ text, kind: 'caption' as const })),
+    { text: printSymbol(shape.crystal.group.hermannMauguin), kind: 'group' as const },
+    ...broken(subcaption ?? '', SMALL).map((text) => ({ text, kind: 'remark' as const })),
+  ];
+  let below = UNDER_PICTURE - CAPTION.line;
+  return lines.map(({ text, kind }) => {
+    below += kind === 'caption' ? CAPTION.line : kind === 'group' ? SMALL.line + 2 : SMALL.line;
+    return { text, kind, below };
+  });
 }
 
-/** A type size at which words fit into a cell; they take about half a type size a character. */
-const sizeFor = (text: string, usual: number): number =>
-  Math.max(6, Math.min(usual, (CELL - 6) / (0.57 * [...text].length)));
+function paintCell(
+  { shape, helpers = [], lines }: SheetEntry & { readonly lines: readonly CellLine[] },
+  [x, y]: Point,
+  options: SheetOptions,
+): string {
+  const { view = 'general', style = 'tinted' } = options;
+  const hidden = options.hidden ?? (shape.measures.faces.length < FEW_FACES ? 'thin' : 'none');
+  const picture = figure(shape, { view, style, hidden, labels: 'none', helpers, weights: WEIGHTS, rods: null });
+  const placement = fitInto(picture.bounds, { x: x + INSET, y: y + INSET, width: BOX, height: BOX });
+  const foot: Point = [x + CELL / 2, y + INSET + BOX];
+  return [picture.paint(placement), ...lines.map((line) => paintLine(line, foot))].join('\n');
+}
 
-/** A small line in the middle of a cell, set as a symbol when it has overbars or is a point group. */
-function line(text: string, [x, y]: Point): string {
-  const size = 12;
-  if (!text.includes(OVERBAR) && !/^[\dm/]+$/.test(text))
-    return words(text, { at: [x, y], size: sizeFor(text, size), fill: FAINT, anchor: 'middle' });
+function paintLine({ text, kind, below }: CellLine, [middle, foot]: Point): string {
+  const y = foot + below;
+  if (kind === 'caption') return lineText(text, { at: [middle, y], size: CAPTION.size, anchor: 'middle' });
+  const { size } = SMALL;
+  if (kind === 'remark') return lineText(text, { at: [middle, y], size, fill: FAINT, anchor: 'middle' });
   const symbol = layOutSymbol(text);
-  return symbolText(symbol, { start: [x - (symbol.width * size) / 2, y], size, fill: FAINT });
+  return symbolText(symbol, { start: [middle - (symbol.width * size) / 2, y], size, fill: FAINT });
 }

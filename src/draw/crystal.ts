@@ -1,16 +1,19 @@
-import { printSymbol } from '../crystal/symbol.ts';
 import { USUAL_SIZE } from '../recipe/print-plan.ts';
 import { millimetresPerUnit as unitFor } from '../shape/scale.ts';
 import type { ClosedShape } from '../shape/shape.ts';
-import { type Figure, type FigureOptions, figure, type LineWeights } from './figure.ts';
+import { type FigureOptions, figure, type LineWeights } from './figure.ts';
+import { heading } from './heading.ts';
+import { heightLine } from './height-line.ts';
 import { legend } from './legend.ts';
+import { lineText } from './line-text.ts';
 import { FAINT, PAPER } from './palette.ts';
-import { extentOf, fitInto, type Placement, place, project } from './project.ts';
+import { extentOf, fitInto, place } from './project.ts';
 import type { DrawnRods } from './rods.ts';
-import { heightLine, scaleBar } from './scale-bar.ts';
+import { scaleBar } from './scale-bar.ts';
 import { svgPage } from './svg.ts';
-import { layOutSymbol, symbolText, words } from './symbol-text.ts';
+import type { Point } from './vector.ts';
 import type { View } from './view.ts';
+import { viewWords } from './view-words.ts';
 
 export interface DrawOptions {
   /** `general` by default. */
@@ -31,6 +34,13 @@ export interface DrawOptions {
   readonly height?: boolean;
   /** Name, point group and habit above; true by default. */
   readonly title?: boolean;
+  /** The view in words below the picture, such as "along c"; by default where there is a title. */
+  readonly viewCaption?: boolean;
+  /**
+   * Numbers of the forms that only close what the others leave open, in the crystal's order: drawn without a tint, and
+   * called helper faces in the legend. None by default.
+   */
+  readonly helpers?: readonly number[];
   /** The forms below; true by default. */
   readonly legend?: boolean;
   /** Of the page, pixels; 640 by default. */
@@ -41,9 +51,10 @@ export interface DrawOptions {
 
 const USUAL_WIDTH = 640;
 const MARGIN = 40;
-const HEADER = 84;
-/** Strip below the picture for the scale bar. */
-const BAR_STRIP = 46;
+/** From the top of the page to the top of a title's first line. */
+const ABOVE_TITLE = 27;
+/** Strip below the picture for the scale bar and the name of the view. */
+const STRIP = 46;
 /** Column at the left for the height. */
 const HEIGHT_COLUMN = 96;
 const GAP = 22;
@@ -55,20 +66,30 @@ const WEIGHTS: LineWeights = { outline: 2.4, inner: 1.5, hidden: 0.9 };
  * @throws RangeError for a height without a size, a size or width that is not positive, or a view that is no direction
  */
 export function drawCrystal(shape: ClosedShape, options: DrawOptions = {}): string {
-  const { width = USUAL_WIDTH, ground = 'paper', style = 'tinted' } = options;
+  const { width = USUAL_WIDTH, ground = 'paper', style = 'tinted', helpers = [] } = options;
   check(options, width);
   const picture = figure(shape, figureOptions(shape, options));
+  const title = options.title === false ? null : heading(shape, width - 2 * MARGIN);
   const left = MARGIN + (options.height ? HEIGHT_COLUMN : 0);
-  const top = options.title === false ? MARGIN : HEADER + GAP;
+  const top = title ? ABOVE_TITLE + title.height + GAP : MARGIN;
   const room = { width: width - left - MARGIN, height: 0.85 * width };
   const extent = extentOf(picture.bounds);
   const height = Math.min(room.height, (extent.height * room.width) / extent.width);
   const placement = fitInto(picture.bounds, { x: left, y: top, width: room.width, height });
 
-  const bar = options.millimetresPerUnit !== undefined && options.scaleBar !== false;
-  const forms = options.legend === false ? null : legend(shape, width - 2 * MARGIN, style);
-  const underPicture = top + height + (bar ? BAR_STRIP : 0);
+  const scale = options.millimetresPerUnit;
+  const bar = scale !== undefined && options.scaleBar !== false;
+  const viewCaption = options.viewCaption ?? title !== null;
+  const forms = options.legend === false ? null : legend(shape, width - 2 * MARGIN, { style, helpers });
+  const underPicture = top + height + (bar || viewCaption ? STRIP : 0);
   const bottom = forms ? underPicture + GAP + forms.height : underPicture;
+  const strip = top + height + STRIP - 10;
+  const upright = options.height
+    ? heightLine(shape, picture.frame, placement, {
+        x: place(placement, picture.bounds.low)[0] - 22,
+        millimetresPerUnit: scale!,
+      })
+    : null;
   const page = {
     width,
     height: Math.round(bottom + MARGIN),
@@ -76,19 +97,20 @@ export function drawCrystal(shape: ClosedShape, options: DrawOptions = {}): stri
     ground: ground === 'paper' ? PAPER : null,
   };
   return svgPage(page, [
-    options.title === false ? '' : heading(shape),
-    picture.paint(placement),
-    options.height ? heightOf(shape, picture, placement, options.millimetresPerUnit!) : '',
-    bar
-      ? scaleBar(
-          [width - MARGIN, top + height + BAR_STRIP - 10],
-          placement.scale / options.millimetresPerUnit!,
-          0.28 * width,
-        )
-      : '',
+    title ? title.paint([MARGIN, ABOVE_TITLE]) : '',
+    upright?.svg ?? '',
+    picture.paint(placement, upright?.onBody),
+    viewCaption ? caption(shape, options.view, [MARGIN, strip]) : '',
+    bar ? scaleBar([width - MARGIN, strip], placement.scale / scale, 0.28 * width) : '',
     forms ? forms.paint(MARGIN, underPicture + GAP) : '',
   ]);
 }
+
+const caption = ({ crystal }: ClosedShape, view: View = 'general', at: Point): string =>
+  lineText(viewWords(view, crystal.group.axes), { at, size: 13, fill: FAINT });
+
+const spokenTitle = ({ crystal: { title, group } }: ClosedShape): string =>
+  `${title}, point group ${group.hermannMauguin}`;
 
 function check({ height, millimetresPerUnit }: DrawOptions, width: number): void {
   if (!(width >= 200 && width <= 20_000))
@@ -100,54 +122,8 @@ function check({ height, millimetresPerUnit }: DrawOptions, width: number): void
 }
 
 function figureOptions(shape: ClosedShape, options: DrawOptions): FigureOptions {
-  const { view = 'general', style = 'tinted', hidden = 'thin', labels = 'none', axes } = options;
+  const { view = 'general', style = 'tinted', hidden = 'thin', labels = 'none', helpers = [], axes } = options;
   const millimetresPerUnit = options.millimetresPerUnit ?? unitFor(shape, USUAL_SIZE);
-  return { view, style, hidden, labels, weights: WEIGHTS, rods: axes ? { laid: axes, millimetresPerUnit } : null };
-}
-
-/** The name, and under it the point group with overbars and what is known besides. */
-function heading({ crystal }: ClosedShape): string {
-  const { mineral, group } = crystal;
-  const symbol = layOutSymbol(printSymbol(group.hermannMauguin));
-  const name = nameOf(crystal);
-  const rest = mineral ? [...(mineral.habit ? [mineral.habit] : []), subscripts(mineral.formula)] : [group.system];
-  const under = { at: [MARGIN, HEADER] as const, size: 17, fill: FAINT };
-  if (name === null) {
-    return symbolText(symbol, { start: [MARGIN, 52], size: 27 }) + words(rest.join(' · '), under);
-  }
-  const after = MARGIN + symbol.width * under.size + 7;
-  return [
-    words(name, { at: [MARGIN, 52], size: 27 }),
-    symbolText(symbol, { start: under.at, size: under.size }),
-    words(`· ${rest.join(' · ')}`, { ...under, at: [after, HEADER] }),
-  ].join('\n');
-}
-
-/** Null for a crystal that is known by its point group only. */
-function nameOf({ title, mineral, group }: ClosedShape['crystal']): string | null {
-  if (mineral && title === `${mineral.name}, ${mineral.habit}`) return mineral.name;
-  return title === `Crystal of point group ${group.hermannMauguin}` ? null : title;
-}
-
-const spokenTitle = ({ crystal: { title, group } }: ClosedShape): string =>
-  `${title}, point group ${group.hermannMauguin}`;
-
-/** Figures after a chemical symbol or a bracket go below the line. */
-const subscripts = (formula: string): string =>
-  formula.replace(/(?<=[\p{L})\]])\d+/gu, (figures) =>
-    figures.replace(/\d/g, (figure) => String.fromCodePoint(0x2080 + Number(figure))),
-  );
-
-/** The height along c, at the crystal's left; it is as much foreshortened as c is. */
-function heightOf(
-  { measures }: ClosedShape,
-  { frame, bounds }: Figure,
-  placement: Placement,
-  millimetresPerUnit: number,
-): string {
-  const [low, high] = [measures.low[2], measures.high[2]];
-  const [x] = place(placement, bounds.low);
-  const level = (z: number): number => place(placement, project(frame, [0, 0, z]))[1];
-  if (Math.abs(frame.up[2]) < 1e-9) return ''; // seen along c
-  return heightLine(x - 22, [level(high), level(low)], (high - low) * millimetresPerUnit);
+  const rods = axes ? { laid: axes, millimetresPerUnit } : null;
+  return { view, style, hidden, labels, helpers, weights: WEIGHTS, rods };
 }

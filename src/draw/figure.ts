@@ -1,7 +1,8 @@
 import { faceCorners } from '../polyhedron/measures.ts';
 import { facePlanes } from '../shape/face-planes.ts';
 import type { ClosedShape } from '../shape/shape.ts';
-import { faceLabels, type LabelKind, labelText } from './labels.ts';
+import { interrupt } from './hidden-lines.ts';
+import { type FaceLabel, faceLabels, type LabelKind, labelCorners, labelText } from './labels.ts';
 import { INK, PAPER, shaded, tintOf } from './palette.ts';
 import { type Bounds, boundsOf, hull, type Placement, place, projectAll } from './project.ts';
 import { type DrawnRods, type RodPiece, rodPieces } from './rods.ts';
@@ -25,6 +26,8 @@ export interface FigureOptions {
   readonly hidden: 'thin' | 'none';
   readonly labels: LabelKind | 'none';
   readonly weights: LineWeights;
+  /** Numbers of the forms that only close what the others leave open; they get no tint. */
+  readonly helpers: readonly number[];
   readonly rods: { readonly laid: DrawnRods; readonly millimetresPerUnit: number } | null;
 }
 
@@ -34,7 +37,14 @@ export interface Figure {
   readonly bounds: Bounds;
   readonly frame: ViewFrame;
   /** The picture as SVG elements. */
-  paint(placement: Placement): string;
+  paint(placement: Placement, onBody?: OnBody): string;
+}
+
+/** What is drawn on the body but under rods that stand before it. */
+export interface OnBody {
+  readonly svg: string;
+  /** Convex places on the page that labels keep clear of. */
+  readonly places: readonly (readonly Point[])[];
 }
 
 /** To the light, in the directions of the page: from the upper left, and from the front. */
@@ -48,17 +58,21 @@ export function figure(shape: ClosedShape, options: FigureOptions): Figure {
   return {
     bounds: boundsOf([...vertices, ...rods.flatMap(({ outline }) => outline)]),
     frame,
-    paint: (placement) => {
+    paint: (placement, onBody) => {
       const at = vertices.map((point) => place(placement, point));
       const placed = rods.map((piece) => moved(piece, (point) => place(placement, point)));
       const before = placed.filter(({ layer }) => layer === 'before');
+      const labels = labelsOf(shape, sight, at, [...obstaclesOf(before), ...(onBody?.places ?? [])], options);
       return [
         ...placed.filter(({ layer }) => layer === 'behind').map(rodPath),
         ...paintFaces(shape, sight, frame, at, options),
-        ...paintEdges(sight, at, options),
-        ...paintLabels(shape, sight, frame, at, before, options),
+        ...paintEdges(sight, at, labels.map(labelCorners), options),
+        ...(onBody ? [onBody.svg] : []),
+        ...labels.map(labelText),
         ...before.map(rodPath),
-      ].join('\n');
+      ]
+        .filter((part) => part !== '')
+        .join('\n');
     },
   };
 }
@@ -80,11 +94,16 @@ const moved = (piece: RodPiece, by: (point: Point) => Point): RodPiece => ({
 const outlineOf = ({ solid }: ClosedShape, face: number, at: readonly Point[]): Point[] =>
   faceCorners(solid, face).map((vertex) => at[vertex]!);
 
-function colourOf({ solid, measures }: ClosedShape, face: number, frame: ViewFrame, style: FigureOptions['style']) {
+function colourOf(
+  { solid, measures }: ClosedShape,
+  face: number,
+  frame: ViewFrame,
+  { style, helpers }: FigureOptions,
+): string {
   if (style === 'lines') return PAPER;
   const normal = vectorAt(measures.normals, face);
   const seen: Vector = [dot(frame.right, normal), dot(frame.up, normal), dot(frame.toward, normal)];
-  return shaded(tintOf(solid.planes.form[face]!), dot(seen, LIGHT));
+  return shaded(tintOf(solid.planes.form[face]!, helpers), dot(seen, LIGHT));
 }
 
 /** Faces of a convex body do not overlap, so their order does not matter. */
@@ -93,49 +112,51 @@ function paintFaces(
   { front }: Sight,
   frame: ViewFrame,
   at: readonly Point[],
-  { style }: FigureOptions,
+  options: FigureOptions,
 ): string[] {
   return front.map((face) =>
-    element('path', { d: closedPath(outlineOf(shape, face, at)), fill: colourOf(shape, face, frame, style) }),
+    element('path', { d: closedPath(outlineOf(shape, face, at)), fill: colourOf(shape, face, frame, options) }),
   );
 }
 
-function paintEdges({ edges, silhouette }: Sight, at: readonly Point[], { hidden, weights }: FigureOptions): string[] {
-  const linesOf = (kind: string): string =>
-    linePath(edges.filter((edge) => edge.kind === kind).map(({ vertices: [p, q] }) => [at[p]!, at[q]!] as const));
+/** @param gaps where labels stand: edges behind the body are interrupted there, those in front do not come near */
+function paintEdges(
+  { edges, silhouette }: Sight,
+  at: readonly Point[],
+  gaps: readonly (readonly Point[])[],
+  { hidden, weights }: FigureOptions,
+): string[] {
+  const linesOf = (kind: string) =>
+    edges.filter((edge) => edge.kind === kind).map(({ vertices: [p, q] }) => [at[p]!, at[q]!] as const);
   const stroke = { fill: 'none', stroke: INK, 'stroke-linejoin': 'round', 'stroke-linecap': 'round' };
-  const [behind, inner] = [linesOf('hidden'), linesOf('inner')];
-  const dash = `${4 * weights.hidden} ${4 * weights.hidden}`;
+  const behind = hidden === 'thin' ? linePath(interrupt(linesOf('hidden'), gaps)) : '';
+  const inner = linePath(linesOf('inner'));
+  const dash = {
+    'stroke-linecap': 'butt',
+    'stroke-width': weights.hidden,
+    'stroke-dasharray': `${4 * weights.hidden} ${4 * weights.hidden}`,
+    'stroke-opacity': 0.6,
+  };
   return [
-    hidden === 'thin' && behind !== ''
-      ? element('path', {
-          d: behind,
-          ...stroke,
-          'stroke-linecap': 'butt',
-          'stroke-width': weights.hidden,
-          'stroke-dasharray': dash,
-          'stroke-opacity': 0.6,
-        })
-      : '',
+    behind === '' ? '' : element('path', { d: behind, ...stroke, ...dash }),
     inner === '' ? '' : element('path', { d: inner, ...stroke, 'stroke-width': weights.inner }),
     element('path', { d: closedPath(silhouette.map((v) => at[v]!)), ...stroke, 'stroke-width': weights.outline }),
-  ].filter((part) => part !== '');
+  ];
 }
 
-function paintLabels(
+const obstaclesOf = (rods: readonly RodPiece[]): Point[][] =>
+  rods.filter(({ kind }) => kind === 'rod' || kind === 'side').map(({ outline }) => hull(outline));
+
+function labelsOf(
   shape: ClosedShape,
   { front }: Sight,
-  frame: ViewFrame,
   at: readonly Point[],
-  rods: readonly RodPiece[],
-  { labels, style }: FigureOptions,
-): string[] {
+  obstacles: readonly (readonly Point[])[],
+  { labels }: FigureOptions,
+): FaceLabel[] {
   if (labels === 'none') return [];
   const faces = front.map((face) => ({ face, outline: outlineOf(shape, face, at) }));
-  const obstacles = rods.filter(({ kind }) => kind === 'rod' || kind === 'side').map(({ outline }) => hull(outline));
-  return faceLabels(shape, labels, faces, obstacles).map((label) =>
-    labelText(label, colourOf(shape, label.face, frame, style)),
-  );
+  return faceLabels(shape, labels, faces, obstacles);
 }
 
 const ROD_COLOURS: Readonly<Record<RodPiece['kind'], string>> = {

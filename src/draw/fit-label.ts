@@ -14,7 +14,7 @@ export interface LabelPlace {
 }
 
 /** A straight line with `x·nx + y·ny + shift` growing into the room that is left for the label. */
-type HalfPlane = readonly [nx: number, ny: number, shift: number];
+export type HalfPlane = readonly [nx: number, ny: number, shift: number];
 
 /** Share of the best size that a label may give up to stand nearer to the middle of its face. */
 const PULL_TO_MIDDLE = 0.25;
@@ -24,6 +24,57 @@ const COMFORT = 1.5;
 const SHORTEST = 1e-6;
 const GRID = 14;
 const REFINEMENTS = 14;
+
+/** Where a label fits best when it may lie askew. */
+export interface TurnedPlace extends LabelPlace {
+  /** Of its line on the page, degrees, positive clockwise; 0 for one that stands level. */
+  readonly turn: number;
+}
+
+/** A level label smaller than this share of the type size asked for may be turned along a side of the face … */
+const POOR = 0.75;
+/** … where it can be larger by this factor. */
+const GAIN = 1.3;
+
+/** As `placeLabel`, level where that serves, else along one of the face's sides. */
+export function placeLabelTurned(
+  face: readonly Point[],
+  box: LabelBox,
+  obstacles: readonly (readonly Point[])[],
+  enough: number,
+): TurnedPlace {
+  const level: TurnedPlace = { ...placeLabel(face, box, obstacles, enough), turn: 0 };
+  if (level.size >= POOR * enough) return level;
+  let best: TurnedPlace | null = null;
+  for (const turn of directions(face)) {
+    const back = turned(-turn);
+    const spot = placeLabel(
+      face.map(back),
+      box,
+      obstacles.map((obstacle) => obstacle.map(back)),
+      enough,
+    );
+    if (spot.size > (best?.size ?? 0)) best = { size: spot.size, centre: turned(turn)(spot.centre), turn };
+  }
+  return best && best.size >= GAIN * level.size ? best : level;
+}
+
+/** Turns of the page by an angle in degrees, positive clockwise because y points down. */
+export function turned(degrees: number): (point: Point) => Point {
+  const [cos, sin] = [Math.cos((degrees * Math.PI) / 180), Math.sin((degrees * Math.PI) / 180)];
+  return ([x, y]) => [x * cos - y * sin, x * sin + y * cos];
+}
+
+/** Directions of a polygon's sides between −90° and 90°, so that nothing along them stands on its head. */
+function directions(polygon: readonly Point[]): number[] {
+  const angles = polygon.flatMap(([x, y], i) => {
+    const [nextX, nextY] = polygon[(i + 1) % polygon.length]!;
+    const [dx, dy] = [nextX - x, nextY - y];
+    if (Math.hypot(dx, dy) < SHORTEST) return [];
+    return [Math.atan(dy / dx) * (180 / Math.PI)];
+  });
+  return [...new Set(angles.map((angle) => Math.round(angle)))];
+}
 
 /**
  * Where a label fits best in a convex face, clear of convex obstacles, as in finding a polygon's pole of
@@ -77,7 +128,7 @@ function boundsOverlap(a: readonly Point[], b: readonly Point[]): boolean {
 }
 
 /** The sides of a convex polygon, positive inside. */
-function inwardLines(polygon: readonly Point[]): HalfPlane[] {
+export function inwardLines(polygon: readonly Point[]): HalfPlane[] {
   const sense = Math.sign(signedArea(polygon));
   return polygon.flatMap(([x, y], i): HalfPlane[] => {
     const [nextX, nextY] = polygon[(i + 1) % polygon.length]!;

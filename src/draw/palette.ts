@@ -24,7 +24,12 @@ export const FORM_TINTS: readonly string[] = [
   '#cbd5ab', // moss
 ];
 
-export const tintOf = (form: number): string => FORM_TINTS[form % FORM_TINTS.length]!;
+/** Faces that only close what the form in question leaves open: nearly paper, and no hue. */
+export const HELPER_TINT = '#e6e4de';
+
+/** The tint of a form by its number, `HELPER_TINT` for those named helpers. */
+export const tintOf = (form: number, helpers: readonly number[] = []): string =>
+  helpers.includes(form) ? HELPER_TINT : FORM_TINTS[form % FORM_TINTS.length]!;
 
 const channels = (colour: string): number[] => [1, 3, 5].map((at) => Number.parseInt(colour.slice(at, at + 2), 16));
 

@@ -37,30 +37,3 @@ export function scaleBar(end: Point, pixelsPerMillimetre: number, mostPixels: nu
     words(`${millimetres} mm`, { at: [(start + x) / 2, y - 8], size: 13, fill: FAINT, anchor: 'middle' })
   );
 }
-
-/** A line that states a length which stands upright on the page. */
-export function heightLine(x: number, [top, bottom]: readonly [number, number], millimetres: number): string {
-  const line = linePath([
-    [
-      [x, top],
-      [x, bottom],
-    ],
-    [
-      [x - 6, top],
-      [x + 6, top],
-    ],
-    [
-      [x - 6, bottom],
-      [x + 6, bottom],
-    ],
-  ]);
-  return (
-    element('path', { d: line, stroke: FAINT, 'stroke-width': 1, fill: 'none' }) +
-    words(`${millimetres.toFixed(1)} mm`, {
-      at: [x - 10, (top + bottom) / 2 + 4.5],
-      size: 13,
-      fill: FAINT,
-      anchor: 'end',
-    })
-  );
-}

@@ -17,6 +17,9 @@ const WIDTHS: Readonly<Record<string, number>> = {
   ']': 0.42,
   '/': 0.38,
   m: 0.88,
+  ',': 0.32,
+  ';': 0.34,
+  '.': 0.32,
 };
 const USUAL_WIDTH = 0.6;
 /** Heights above the baseline in type sizes: tops of figures, and the overbar over them. */
@@ -64,12 +67,10 @@ export interface SymbolPlace {
   readonly start: Point;
   readonly size: number;
   readonly fill?: string;
-  /** A rim in this colour keeps lines below from running through the characters. */
-  readonly rim?: string;
 }
 
 /** The symbol with every character at its place and its overbars as drawn lines, the same in every renderer. */
-export function symbolText(symbol: SymbolText, { start: [x, y], size, fill = INK, rim }: SymbolPlace): string {
+export function symbolText(symbol: SymbolText, { start: [x, y], size, fill = INK }: SymbolPlace): string {
   const characters = symbol.glyphs.flatMap(({ character, at }) =>
     character === ' '
       ? []
@@ -81,19 +82,10 @@ export function symbolText(symbol: SymbolText, { start: [x, y], size, fill = INK
           ),
         ],
   );
-  const text = (extra: Record<string, string | number>) =>
-    element(
-      'text',
-      { y, 'font-family': SERIF, 'font-size': size, 'text-anchor': 'middle', fill, ...extra },
-      ...characters,
-    );
+  const look = { y, 'font-family': SERIF, 'font-size': size, 'text-anchor': 'middle', fill };
   const bars = barsOf(symbol, [x, y], size);
-  const barPath = (stroke: string, weight: number) =>
-    bars === '' ? '' : element('path', { d: bars, stroke, 'stroke-width': weight * size, fill: 'none' });
-  const below = rim
-    ? text({ stroke: rim, 'stroke-width': 0.28 * size, 'stroke-linejoin': 'round' }) + barPath(rim, 0.28)
-    : '';
-  return below + text({}) + barPath(fill, BAR_WEIGHT);
+  const barPath = { d: bars, stroke: fill, 'stroke-width': BAR_WEIGHT * size, fill: 'none' };
+  return element('text', look, ...characters) + (bars === '' ? '' : element('path', barPath));
 }
 
 /** One bar a digit; over a number of several digits, which has blanks about it, the bars join. */
@@ -121,11 +113,10 @@ export interface TextPlace {
   readonly fill?: string;
   readonly anchor?: 'start' | 'middle' | 'end';
   readonly italic?: boolean;
-  readonly rim?: string;
 }
 
 /** Ordinary words. */
-export function words(text: string, { at: [x, y], size, fill = INK, anchor, italic, rim }: TextPlace): string {
+export function words(text: string, { at: [x, y], size, fill = INK, anchor, italic }: TextPlace): string {
   const attributes = {
     x: num(x),
     y: num(y),
@@ -135,9 +126,5 @@ export function words(text: string, { at: [x, y], size, fill = INK, anchor, ital
     'font-style': italic ? 'italic' : undefined,
     fill,
   };
-  const content = escapeText(text);
-  const below = rim
-    ? element('text', { ...attributes, stroke: rim, 'stroke-width': 0.28 * size, 'stroke-linejoin': 'round' }, content)
-    : '';
-  return below + element('text', attributes, content);
+  return element('text', attributes, escapeText(text));
 }

@@ -4,7 +4,7 @@ import { presetRecipe, type Shelf } from './shelf.ts';
 import { structureProblems } from './structure.ts';
 import { readText } from './text.ts';
 
-/** A preset's name: words of letters, digits, - and _, with at most one /. Anything else in a text is a recipe. */
+/** A preset's name: letters, digits, points, - and _, with at most one /. Anything else in a text is a recipe. */
 const PRESET_NAME = /^\s*\w[\w.-]*(\/[\w.-]+)?\s*$/;
 
 /**

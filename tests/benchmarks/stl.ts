@@ -18,10 +18,9 @@ export function stl(): Table {
   geometry.setAttribute('position', new BufferAttribute(Float32Array.from(mesh.positions), 3));
   geometry.setIndex(new BufferAttribute(mesh.triangles, 1));
   const theirs = new ThreeMesh(geometry);
-  const exporter = new STLExporter();
   const phases = [0, 1, 2].map(() => ({
     ours: times(() => writeStl(mesh, 'benchmark'), PHASE),
-    three: times(() => exporter.parse(theirs, { binary: true }), PHASE),
+    three: times(() => new STLExporter().parse(theirs, { binary: true }), PHASE),
   }));
   const ours = phases.flatMap((phase) => phase.ours);
   const three = phases.flatMap((phase) => phase.three);

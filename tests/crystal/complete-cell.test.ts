@@ -40,7 +40,7 @@ describe('cells that are refused', () => {
     ['monoclinic-b', { a: 1, b: 2, c: 3, beta: 95, gamma: 95 }, 'cell-mismatch', 'needs γ = 90°'],
     ['triclinic', { a: 1, alpha: 90 }, 'cell-incomplete', 'a triclinic cell also needs b, c, β, γ'],
     ['cubic', {}, 'cell-incomplete', 'also needs a, b, c'],
-    ['cubic', { a: 0 }, 'cell-length', 'a must be a length above zero, not 0'],
+    ['cubic', { a: 0 }, 'cell-length', 'a must be a length between 0.001 and 100000 Å, not 0'],
     ['cubic', { a: Number.POSITIVE_INFINITY }, 'cell-length', 'not Infinity'],
     ['cubic', { a: Number.NaN }, 'cell-length', 'not NaN'],
     ['monoclinic-b', { a: 1, b: 1, c: 1, beta: 180 }, 'cell-angle', 'β must lie between 0° and 180°'],

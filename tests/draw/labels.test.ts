@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { placeLabel } from '../../src/draw/fit-label.ts';
-import { faceLabels, type PageFace } from '../../src/draw/labels.ts';
+import { placeLabel, placeLabelTurned } from '../../src/draw/fit-label.ts';
+import { faceLabels, labelCorners, type PageFace } from '../../src/draw/labels.ts';
 import { projectAll } from '../../src/draw/project.ts';
 import type { Point } from '../../src/draw/vector.ts';
 import { viewFrame } from '../../src/draw/view.ts';
@@ -64,6 +64,33 @@ describe('placing a label', () => {
   });
 });
 
+describe('a label that may be turned', () => {
+  const sliver = (angle: number): Point[] => {
+    const [cos, sin] = [Math.cos((angle * Math.PI) / 180), Math.sin((angle * Math.PI) / 180)];
+    const outline: Point[] = [
+      [-60, -8],
+      [60, -8],
+      [60, 8],
+      [-60, 8],
+    ];
+    return outline.map(([x, y]) => [x * cos - y * sin, x * sin + y * cos]);
+  };
+
+  it.each([
+    [50, 50],
+    [-70, -70],
+    [130, -50],
+  ])('lies along a narrow face at %d°, never upside down', (angle, turn) => {
+    const spot = placeLabelTurned(sliver(angle), { width: 3, height: 1 }, [], 15);
+    expect(spot.turn).toBe(turn);
+    expect(spot.size).toBeGreaterThan(14);
+  });
+
+  it('stands level where that serves as well', () => {
+    expect(placeLabelTurned(square, { width: 3, height: 1 }, [], 15).turn).toBe(0);
+  });
+});
+
 function pageFaces(shape: ClosedShape, view: Parameters<typeof viewFrame>[0], scale: number): PageFace[] {
   const frame = viewFrame(view, shape.crystal.metric);
   const points = projectAll(frame, shape.measures.positions).map(([x, y]): Point => [300 + scale * x, 300 - scale * y]);
@@ -81,8 +108,8 @@ describe('labels of faces', () => {
         for (const label of faceLabels(shape, kind, faces, [])) {
           const { outline } = faces.find(({ face }) => face === label.face)!;
           // Shrunk a little, because corners of a label that fits exactly lie on the face's edges.
-          const box = corners({ centre: label.centre, size: label.size * 0.999 }, label.box.width, label.box.height);
-          for (const corner of box) expect(contains(outline, corner), `${label.text} at ${corner}`).toBe(true);
+          for (const corner of labelCorners({ ...label, size: label.size * 0.999 }))
+            expect(contains(outline, corner), `${label.text} at ${corner}`).toBe(true);
         }
       }),
       { numRuns: 150 },

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { FAINT, FORM_TINTS, INK, mix, PAPER, shaded, tintOf } from '../../src/draw/palette.ts';
+import { FAINT, FORM_TINTS, HELPER_TINT, INK, mix, PAPER, shaded, tintOf } from '../../src/draw/palette.ts';
 
 /** Relative luminance of an sRGB colour (WCAG 2, from memory). */
 function luminance(colour: string): number {
@@ -32,8 +32,16 @@ describe('tints of the forms', () => {
     expect(tintOf(FORM_TINTS.length + 2)).toBe(FORM_TINTS[2]);
   });
 
+  it('are not for helpers', () => {
+    expect([tintOf(0, [1, 2]), tintOf(1, [1, 2]), tintOf(2, [1, 2])]).toEqual([
+      FORM_TINTS[0],
+      HELPER_TINT,
+      HELPER_TINT,
+    ]);
+  });
+
   it('leave ink the contrast that WCAG 2 asks of text (4.5), in light and in shade', () => {
-    for (const tint of FORM_TINTS)
+    for (const tint of [...FORM_TINTS, HELPER_TINT])
       for (const cosine of [-1, -0.2, 0.3, 0.55, 0.8, 1])
         expect(contrast(shaded(tint, cosine), INK), `${tint} at ${cosine}`).toBeGreaterThanOrEqual(4.5);
     expect(contrast(PAPER, INK)).toBeGreaterThanOrEqual(7);

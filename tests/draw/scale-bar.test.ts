@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { heightLine, roundLength, scaleBar } from '../../src/draw/scale-bar.ts';
+import { roundLength, scaleBar } from '../../src/draw/scale-bar.ts';
 import { pathPoints, readXml } from './xml.ts';
 
 describe('lengths of scale bars', () => {
@@ -47,14 +47,5 @@ describe('the drawn bar', () => {
         expect(end![0] - start![0]).toBeLessThanOrEqual(180.01);
       }),
     );
-  });
-
-  it('states a height beside its line', () => {
-    const [, path, text] = readXml(`<svg>${heightLine(50, [100, 300], 89.96)}</svg>`);
-    expect(text!.text).toBe('90.0 mm');
-    expect(pathPoints(path!.attributes.d!).slice(0, 2)).toEqual([
-      [50, 100],
-      [50, 300],
-    ]);
   });
 });

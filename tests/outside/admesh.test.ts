@@ -7,15 +7,7 @@ import { weldFloat32 } from '../../src/files/mesh/weld.ts';
 import { writeStl, writeStlText } from '../../src/files/stl/write.ts';
 import type { Mesh } from '../../src/print/mesh.ts';
 import { cube, octahedron, together, torus, turned, unwelded } from '../files/shapes.ts';
-
-/** Whether the program admesh can be run here (Debian package `admesh`). */
-const admeshIsHere = ((): boolean => {
-  try {
-    return execFileSync('admesh', ['--version'], { timeout: 10_000 }).length > 0;
-  } catch {
-    return false;
-  }
-})();
+import { ADMESH_ZEROS, canRun } from './programs.ts';
 
 /** What admesh says about a file; it repairs by default and reports what it had to do. */
 function report(bytes: Uint8Array): string {
@@ -34,19 +26,7 @@ const number = (text: string, label: string): number => {
   return found === undefined ? Number.NaN : Number(found);
 };
 
-// The report's lines are those of admesh 0.98.4; the left number of a line is the file as it came.
-const MUST_BE_ZERO = [
-  'Total disconnected facets',
-  'Degenerate facets',
-  'Edges fixed',
-  'Facets removed',
-  'Facets added',
-  'Facets reversed',
-  'Backwards edges',
-  'Normals fixed',
-];
-
-describe.runIf(admeshIsHere)('admesh', () => {
+describe.runIf(canRun('admesh'))('admesh', () => {
   const hollow = together(cube(10), turned(cube(6, [2, 2, 2])));
   const ring = torus(30.1, 9.7, 60, 40);
   const shapes: [string, Mesh, number, number][] = [
@@ -62,7 +42,7 @@ describe.runIf(admeshIsHere)('admesh', () => {
     const welded = weldFloat32(mesh);
     for (const bytes of [writeStl(welded, 'part'), new TextEncoder().encode(writeStlText(welded, 'part'))]) {
       const text = report(bytes);
-      for (const label of MUST_BE_ZERO) expect(number(text, label), `${label} in\n${text}`).toBe(0);
+      for (const label of ADMESH_ZEROS) expect(number(text, label), `${label} in\n${text}`).toBe(0);
       expect(number(text, 'Number of facets')).toBe(welded.triangles.length / 3);
       expect(number(text, 'Number of parts')).toBe(parts);
       if (!Number.isNaN(volume)) expect(number(text, 'Volume') / volume).toBeCloseTo(1, 5);

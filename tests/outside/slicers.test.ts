@@ -7,20 +7,12 @@ import { PRESET_FOLDER } from '../../src/disk/preset-folder.ts';
 import { make } from '../../src/index.ts';
 import type { MadeFile } from '../../src/make.ts';
 import { preset } from '../../src/recipe/shelf.ts';
+import { ADMESH_ZEROS, canRun } from './programs.ts';
 
 /**
  * What other programs say of our files: admesh (repair statistics) and PrusaSlicer (manifold test, slicing), both from
  * Debian. On machines without them these tests are left out, unless GONIOLITH_OUTSIDE asks for them.
  */
-const demanded = process.env.GONIOLITH_OUTSIDE !== undefined;
-const has = (program: string): boolean => {
-  try {
-    execFileSync('sh', ['-c', `command -v ${program}`], { stdio: 'ignore' });
-    return true;
-  } catch {
-    return false;
-  }
-};
 const folder = mkdtempSync(join(tmpdir(), 'goniolith-outside-'));
 afterAll(() => rmSync(folder, { recursive: true, force: true }));
 
@@ -44,19 +36,7 @@ async function written(recipe: string, print = ''): Promise<(MadeFile & { path: 
   });
 }
 
-/** Statistics of admesh's report that are 0 for a sound file; both columns of the disconnected facets. */
-const ADMESH_ZEROS = [
-  'Total disconnected facets',
-  'Degenerate facets',
-  'Edges fixed',
-  'Facets removed',
-  'Facets added',
-  'Facets reversed',
-  'Backwards edges',
-  'Normals fixed',
-];
-
-describe.runIf(demanded || has('admesh'))('admesh', () => {
+describe.runIf(canRun('admesh'))('admesh', () => {
   it.each([...minerals, ...sets])('finds nothing to repair in %s', async (recipe) => {
     for (const { path } of await written(recipe)) {
       const report = run('admesh', path);
@@ -76,7 +56,7 @@ describe.runIf(demanded || has('admesh'))('admesh', () => {
   });
 });
 
-describe.runIf(demanded || has('prusa-slicer'))('PrusaSlicer', () => {
+describe.runIf(canRun('prusa-slicer'))('PrusaSlicer', () => {
   it.each([minerals, sets].flatMap((all) => chunks(all, 20)).map((all) => [all.length, all[0]!, all] as const))(
     'says manifold of %i presets from %s on',
     async (count, _, recipes) => {
