@@ -28,8 +28,11 @@ export interface Library {
   make(recipe: Recipe): Promise<Made>;
 }
 
-/** The library on a shelf of presets; runs in browsers as in Node. */
-export function library(shelf: Shelf): Library {
+/**
+ * The library on a shelf of presets; runs in browsers as in Node.
+ * @param application program and version, for files that state what made them
+ */
+export function library(shelf: Shelf, application = 'Goniolith'): Library {
   const resolved = (recipe: Recipe): Resolved => read(recipe, shelf);
   return {
     crystal: (recipe) => resolved(recipe).crystal,
@@ -37,7 +40,7 @@ export function library(shelf: Shelf): Library {
       const whole = resolved(recipe);
       return inspection(whole, polyhedron(whole.crystal));
     },
-    make: async (recipe) => makeModel(resolved(recipe)),
+    make: async (recipe) => makeModel(resolved(recipe), application),
   };
 }
 

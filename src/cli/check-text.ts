@@ -6,7 +6,7 @@ export function checkText(path: string, format: string, found: MeshReport): stri
   const size = [0, 1, 2].map((axis) => short(high[axis]! - low[axis]!)).join(' × ');
   const bodies = found.bodies.length === 1 ? 'one body' : `${found.bodies.length} bodies`;
   const lines = [
-    `${path}: ${found.ok ? 'sound' : 'NOT sound'} (${format} STL, ${found.triangles} triangles, ${bodies})`,
+    `${path}: ${found.ok ? 'sound' : 'NOT sound'} (${format}, ${found.triangles} triangles, ${bodies})`,
     `  watertight ${found.watertight ? 'yes' : 'no'}; volume ${short(found.volume)} mm³, surface ${short(found.area)} mm², extents ${size} mm`,
     ...found.problems.map(({ message }) => `  ${message}`),
     ...moreOpenEdges(found),

@@ -3,7 +3,7 @@ import type { DrawOptions } from '../draw/crystal.ts';
 import type { View } from '../draw/view.ts';
 import type { Crystal } from '../recipe/crystal.ts';
 import { readDirection } from '../recipe/print-plan.ts';
-import { UsageError } from './failure.ts';
+import { oneOf, UsageError } from './failure.ts';
 
 export interface LookFlags {
   readonly view: string;
@@ -39,10 +39,4 @@ export function viewFrom(text: string, { group }: Crystal): View {
   throw new UsageError(
     `--view "${text}" is no direction: give general, an axis such as c or "[111]", a face such as "(111)", or turn and tilt such as "30 20".`,
   );
-}
-
-function oneOf<T extends string>(flag: string, word: string, known: readonly T[]): T {
-  const found = known.find((one) => one === word);
-  if (found === undefined) throw new UsageError(`${flag} is ${known.join(' or ')}, not "${word}".`);
-  return found;
 }

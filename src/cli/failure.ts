@@ -45,3 +45,10 @@ export async function naming<T>(what: string, step: () => Promise<T> | T): Promi
     throw error;
   }
 }
+
+/** @throws UsageError unless the word is one of those that the flag knows */
+export function oneOf<T extends string>(flag: string, word: string, known: readonly T[]): T {
+  const found = known.find((one) => one === word);
+  if (found === undefined) throw new UsageError(`${flag} is ${known.join(' or ')}, not "${word}".`);
+  return found;
+}

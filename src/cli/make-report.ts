@@ -47,21 +47,29 @@ export function makeReport({ crystal }: Resolved, made: Made, folder: string) {
     wholeExtents: whole,
     /** Of the crystal alone, mm³. */
     volume: measures.volume * scale ** 3,
-    files: made.files.map(({ name, holds, bytes, check }, i) => ({
+    files: made.files.map(({ name, holds, copies, bytes, checks }) => ({
       path: join(folder, name),
       holds,
       /** How many to print. */
-      copies: i === 0 ? 1 : made.parts[i - 1]!.placed.length,
+      copies,
       bytes: bytes.length,
-      triangles: check.triangles,
-      bodies: check.bodies.length,
-      watertight: check.watertight,
-      volume: check.volume,
+      triangles: sum(checks, ({ triangles }) => triangles),
+      bodies: sum(checks, ({ bodies }) => bodies.length),
+      watertight: checks.every(({ watertight }) => watertight),
+      volume: sum(checks, ({ volume }) => volume),
     })),
     hasRods: withRods !== '' || made.parts.length > 1,
-    remarks: [...made.files.slice(1).map(({ name, holds }) => `${name}: ${holds}.`), ...absent, ...made.remarks],
+    remarks: [
+      ...made.files
+        .slice(1)
+        .map(({ name, holds, copies }) => `${name}: ${holds}${copies > 1 ? `; print ${copies}` : ''}.`),
+      ...absent,
+      ...made.remarks,
+    ],
     summary: `${crystal.title}: point group ${group}, ${measures.faces.length} faces (${names.join(', ')}); crystal ${extents.join(' × ')} mm, ${volume} cm³${withRods}; closed, checked.`,
   };
 }
 
 const round = (value: number, places: number): number => Number(value.toFixed(places));
+
+const sum = <T>(all: readonly T[], of: (one: T) => number): number => all.reduce((total, one) => total + of(one), 0);

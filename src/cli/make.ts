@@ -1,17 +1,11 @@
 import { Command } from 'commander';
 import { naming, UsageError } from './failure.ts';
+import type { PrintFlags } from './print-flags.ts';
 import { json, remark, result } from './say.ts';
+import { VERSION } from './version.ts';
 
-interface MakeFlags {
+interface MakeFlags extends PrintFlags {
   out: string;
-  size?: string;
-  axes?: string | true;
-  rods?: string;
-  rodDiameter?: string;
-  reach?: string;
-  printer?: string;
-  text?: true;
-  name?: string;
   json?: true;
 }
 
@@ -32,6 +26,12 @@ export function makeCommand(): Command {
     .option('--rod-diameter <length>', 'thickness of the rods')
     .option('--reach <length>', 'how far rods stand out of the crystal')
     .option('-p, --printer <profile>', 'printer profile: fdm-0.4, fdm-0.25, sla')
+    .option('-b, --body <kind>', 'solid, hollow, frame, halves, sectors or units')
+    .option('-l, --letters [relief]', 'letters on the faces, engraved or raised')
+    .option('--blunt [radius]', 'blunt edges and corners')
+    .option('--stand', 'a stand with a label in raised letters and braille')
+    .option('--pair', 'two copies: one plain, one with axes and lettered faces')
+    .option('-f, --files <kinds>', 'stl, 3mf, glb, or several: stl,3mf')
     .option('--text', 'write STL as text instead of binary')
     .option('-n, --name <name>', 'file name without ending')
     .option('--json', 'print a report for machines')
@@ -55,7 +55,7 @@ async function make(recipes: string[], flags: MakeFlags): Promise<void> {
   const models = [];
   for (const recipe of recipes) {
     const resolved = await recipeFrom(recipe, print);
-    models.push({ resolved, made: await naming(recipe, () => makeModel(resolved)) });
+    models.push({ resolved, made: await naming(recipe, () => makeModel(resolved, `Goniolith ${VERSION}`)) });
   }
   await writeFiles(
     flags.out,

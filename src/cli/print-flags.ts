@@ -1,6 +1,6 @@
 import { choiceOf } from '../recipe/print-plan.ts';
 import type { RecipeInput } from '../recipe/schema.ts';
-import { UsageError } from './failure.ts';
+import { oneOf, UsageError } from './failure.ts';
 
 type PrintInput = NonNullable<RecipeInput['print']>;
 
@@ -13,7 +13,17 @@ export interface PrintFlags {
   printer?: string;
   text?: true;
   name?: string;
+  body?: string;
+  letters?: string | true;
+  blunt?: string | true;
+  stand?: true;
+  pair?: true;
+  files?: string;
 }
+
+const BODIES = ['solid', 'hollow', 'frame', 'halves', 'sectors', 'units'] as const;
+const RELIEFS = ['engraved', 'raised'] as const;
+const FILES = ['stl', '3mf', 'glb'] as const;
 
 /** Flags as the part of a recipe that they stand for. @throws UsageError where they do not go together */
 export function printFlags(flags: PrintFlags): PrintInput {
@@ -24,6 +34,16 @@ export function printFlags(flags: PrintFlags): PrintInput {
     ...(flags.size !== undefined && { size: flags.size }),
     ...(axes !== undefined && { axes }),
     ...(flags.printer !== undefined && { printer: flags.printer }),
+    ...(flags.body !== undefined && { body: oneOf('--body', flags.body, BODIES) }),
+    ...(flags.letters !== undefined && {
+      letters: flags.letters === true || oneOf('--letters', flags.letters, RELIEFS),
+    }),
+    ...(flags.blunt !== undefined && { blunt: flags.blunt }),
+    ...(flags.stand && { stand: true }),
+    ...(flags.pair && { pair: true }),
+    ...(flags.files !== undefined && {
+      files: flags.files.split(',').map((kind) => oneOf('--files', kind.trim(), FILES)),
+    }),
     ...(flags.text && { stl: 'text' as const }),
     ...(flags.name !== undefined && { file: flags.name }),
   };

@@ -1,8 +1,8 @@
 import { constants } from 'node:fs';
 import { access, open, readdir, stat } from 'node:fs/promises';
 import { basename, dirname } from 'node:path';
-import { DiskError, diskErrorOf, systemCode } from './disk-error.ts';
 import { nearest } from '../crystal/nearest.ts';
+import { DiskError, diskErrorOf, systemCode } from './disk-error.ts';
 
 export { decodeText } from './decode-text.ts';
 

@@ -7,7 +7,17 @@ export type FileErrorCode =
   | 'notStl'
   | 'notFinite'
   | 'syntax'
-  | 'badMesh';
+  | 'badMesh'
+  | 'notZip'
+  | 'damaged'
+  | 'tooLarge'
+  | 'missingPart'
+  | 'contentType'
+  | 'unit'
+  | 'index'
+  | 'transform'
+  | 'unsupported'
+  | 'metadata';
 
 /** A fault in a model file: `message` says where and what, `hint` says what mends it. */
 export class FileError extends Error {

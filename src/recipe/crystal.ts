@@ -55,11 +55,44 @@ export interface AxesPlan {
   readonly reach: Millimetres;
 }
 
+/** What the crystal's body is to be. */
+export type BodyPlan =
+  | { readonly kind: 'solid' }
+  | { readonly kind: 'hollow'; readonly wall: Millimetres | null; readonly drains: boolean | null }
+  | { readonly kind: 'frame'; readonly strut: Millimetres | null; readonly bead: boolean }
+  | { readonly kind: 'halves'; readonly plane: Miller | null; readonly join: 'dowels' | 'magnets' | 'none' }
+  | { readonly kind: 'sectors'; readonly by: 'face' | 'form'; readonly gap: Millimetres }
+  | { readonly kind: 'units'; readonly gap: Millimetres };
+
+export interface LettersPlan {
+  readonly relief: 'engraved' | 'raised';
+  readonly text: 'letters' | 'indices';
+}
+
+export type BluntPlan =
+  | { readonly kind: 'round'; readonly radius: Millimetres }
+  | { readonly kind: 'bevel'; readonly width: Millimetres };
+
+export interface StandPlan {
+  /** Null: name, formula, point group, forms and scale. */
+  readonly text: readonly string[] | null;
+  readonly braille: boolean;
+  readonly qr: string | null;
+}
+
+export type FileKind = 'stl' | '3mf' | 'glb';
+
 export interface PrintPlan {
   /** Null when the recipe states none; `make` then takes `USUAL_SIZE`. */
   readonly size: Size | null;
   readonly axes: AxesPlan | null;
+  readonly body: BodyPlan;
+  readonly letters: LettersPlan | null;
+  readonly blunt: BluntPlan | null;
+  readonly stand: StandPlan | null;
+  readonly pair: boolean;
   readonly printer: PrinterProfile;
+  readonly files: readonly FileKind[];
   readonly stl: 'binary' | 'text';
   readonly file: string | null;
 }

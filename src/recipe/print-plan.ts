@@ -49,7 +49,8 @@ function positive(value: number, what: string): number {
   throw new QuantityError(`${what} of ${value} leaves nothing to print.`, 'Give a positive number.');
 }
 
-function bounded(length: Millimetres, what = 'a size'): Millimetres {
+/** @throws QuantityError for a length that is not positive or beyond the largest size */
+export function bounded(length: Millimetres, what = 'a size'): Millimetres {
   positive(length, what);
   if (length <= LARGEST_SIZE) return length;
   throw new QuantityError(

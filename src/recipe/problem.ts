@@ -27,6 +27,7 @@ export type ProblemCode =
   | 'distance'
   | 'size'
   | 'axes'
+  | 'object'
   | 'file-name';
 
 export type Path = readonly (string | number)[];

@@ -1,9 +1,10 @@
 import { nearest } from '../crystal/nearest.ts';
 import type { PointGroup } from '../crystal/point-group.ts';
-import type { PrintPlan } from './crystal.ts';
+import { readBlunt, readBody, readLetters, readStand } from './body-plan.ts';
+import type { BluntPlan, BodyPlan, LettersPlan, PrintPlan, StandPlan } from './crystal.ts';
 import { readAxes, readSize } from './print-plan.ts';
 import type { ProblemList } from './problem-list.ts';
-import type { PrinterProfile, RecipeInput } from './schema.ts';
+import type { BluntInput, BodyInput, LettersInput, PrinterProfile, RecipeInput, StandInput } from './schema.ts';
 import { either, preset, type Shelf } from './shelf.ts';
 
 const USUAL_PRINTER = 'fdm-0.4';
@@ -24,8 +25,20 @@ export function readPrint(
       ? null
       : problems.attempt('axes', ['print', 'axes'], () => readAxes(chosen, group, rod.diameter));
   const file = name === undefined ? null : readFileName(name, problems);
+  const read = <I, T>(
+    key: keyof typeof print,
+    input: I | undefined,
+    otherwise: T,
+    step: (input: I) => T,
+  ): T | undefined => (input === undefined ? otherwise : problems.attempt('object', ['print', key], () => step(input)));
+  const body = read<BodyInput, BodyPlan>('body', print.body, { kind: 'solid' }, (input) => readBody(input, group));
+  const letters = read<LettersInput, LettersPlan | null>('letters', print.letters, null, readLetters);
+  const blunt = read<BluntInput, BluntPlan | null>('blunt', print.blunt, null, readBlunt);
+  const stand = read<StandInput, StandPlan | null>('stand', print.stand, null, readStand);
   if (!printer || size === undefined || axes === undefined || file === undefined) return undefined;
-  return { size, axes, printer, stl: print.stl ?? 'binary', file };
+  if (!body || letters === undefined || blunt === undefined || stand === undefined) return undefined;
+  const { pair = false, files = ['stl'], stl = 'binary' } = print;
+  return { size, axes, body, letters, blunt, stand, pair, printer, files: [...new Set(files)], stl, file };
 }
 
 function readPrinter(name: string, shelf: Shelf, problems: ProblemList): PrinterProfile | undefined {

@@ -57,10 +57,63 @@ const axes = z
   .union([z.boolean(), z.string(), z.number(), z.array(z.number()), chosenAxes])
   .describe('symmetry axes as rods: true or "all" for every axis, "3,2" by order, "[001]" by direction');
 
+const length = lengthText.optional();
+const hollow = z.strictObject({ kind: z.literal('hollow'), wall: length, drains: z.boolean().optional() });
+const frame = z.strictObject({ kind: z.literal('frame'), strut: length, bead: z.boolean().optional() });
+const halves = z.strictObject({
+  kind: z.literal('halves'),
+  plane: faceText
+    .optional()
+    .describe('the cut runs through the centre, parallel to this face; a mirror plane by default'),
+  join: z.enum(['dowels', 'magnets', 'none']).optional(),
+});
+const sectors = z.strictObject({ kind: z.literal('sectors'), by: z.enum(['face', 'form']).optional(), gap: length });
+const units = z.strictObject({ kind: z.literal('units'), gap: length });
+const bodies = [hollow, frame, halves, sectors, units] as const;
+const BODY_KINDS = ['solid', 'hollow', 'frame', 'halves', 'sectors', 'units'] as const;
+const body = z
+  .union([z.enum(BODY_KINDS), ...bodies])
+  .describe('solid; hollow; a frame of its edges; two halves; growth sectors; asymmetric units');
+
+const letters = z
+  .union([
+    z.boolean(),
+    z.enum(['engraved', 'raised']),
+    z.strictObject({
+      relief: z.enum(['engraved', 'raised']).optional(),
+      text: z.enum(['letters', 'indices']).optional(),
+    }),
+  ])
+  .describe('letters or indices on the faces');
+
+const blunt = z
+  .union([z.boolean(), lengthText, z.strictObject({ radius: length, bevel: length })])
+  .describe('edges and corners blunted: a rounding radius, or { bevel: width }');
+
+const stand = z
+  .union([
+    z.boolean(),
+    z.strictObject({
+      text: z.array(z.string()).optional(),
+      braille: z.boolean().optional(),
+      qr: z.string().optional(),
+    }),
+  ])
+  .describe('a stand that holds the crystal, with a label');
+
 const print = z.strictObject({
   size: size.optional(),
   axes: axes.optional(),
+  body: body.optional(),
+  letters: letters.optional(),
+  blunt: blunt.optional(),
+  stand: stand.optional(),
+  pair: z.boolean().optional().describe('two copies: one plain, one with axes and lettered faces'),
   printer: z.string().optional().describe('a printer profile'),
+  files: z
+    .array(z.enum(['stl', '3mf', 'glb']))
+    .min(1)
+    .optional(),
   stl: z.enum(['binary', 'text']).optional(),
   file: z.string().optional().describe('file name without ending'),
 });
@@ -90,11 +143,19 @@ export const KNOWN_KEYS: Readonly<Record<string, readonly string[]>> = {
   print: Object.keys(print.shape),
   'print.size': [...new Set(sizes.flatMap(({ shape }) => Object.keys(shape)))],
   'print.axes': Object.keys(chosenAxes.shape),
+  'print.body': [...new Set(bodies.flatMap(({ shape }) => Object.keys(shape)))],
+  'print.letters': ['relief', 'text'],
+  'print.blunt': ['radius', 'bevel'],
+  'print.stand': ['text', 'braille', 'qr'],
 };
 
 export type RecipeInput = z.input<typeof recipeSchema>;
 export type CellInput = z.input<typeof cell>;
 export type SizeInput = z.input<typeof size>;
+export type BodyInput = z.input<typeof body>;
+export type LettersInput = z.input<typeof letters>;
+export type BluntInput = z.input<typeof blunt>;
+export type StandInput = z.input<typeof stand>;
 export type AxesInput = z.input<typeof axes>;
 export type FaceInput = z.input<typeof faceText>;
 export type ZoneInput = z.input<typeof zoneText>;

@@ -1,9 +1,29 @@
+/** What stands in the way, for programs. */
+export type ObjectErrorCode =
+  | 'open'
+  | 'size'
+  | 'no-axis'
+  | 'rod-too-wide'
+  | 'rods-crowded'
+  | 'not-sound'
+  | 'wall'
+  | 'drain'
+  | 'struts'
+  | 'no-centre'
+  | 'plane'
+  | 'dowel'
+  | 'magnet'
+  | 'gap'
+  | 'direction'
+  | 'text'
+  | 'stand';
+
 /** A crystal that cannot become the object that was asked for. */
 export class ObjectError extends Error {
   override readonly name = 'ObjectError';
 
   constructor(
-    readonly code: 'open' | 'size' | 'no-axis' | 'rod-too-wide' | 'rods-crowded' | 'not-sound',
+    readonly code: ObjectErrorCode,
     message: string,
     readonly hint: string,
   ) {

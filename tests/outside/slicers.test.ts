@@ -47,11 +47,14 @@ describe.runIf(canRun('admesh'))('admesh', () => {
 
   it.each(minerals)('finds nothing to repair in %s with its axes, fused and separate', async (recipe) => {
     for (const fit of ['fused', 'separate'])
-      for (const { path, check } of await written(recipe, `{ size: 80, axes: { fit: ${fit}, diameter: 2 } }`)) {
+      for (const {
+        path,
+        checks: [check],
+      } of await written(recipe, `{ size: 80, axes: { fit: ${fit}, diameter: 2 } }`)) {
         const report = run('admesh', path);
         for (const line of ADMESH_ZEROS)
           expect(new RegExp(`${line}\\s*:\\s*(\\d+)`).exec(report)?.[1], `${fit} ${line}`).toBe('0');
-        expect(Number(/Number of parts\s*:\s*(\d+)/.exec(report)?.[1])).toBe(check.bodies.length);
+        expect(Number(/Number of parts\s*:\s*(\d+)/.exec(report)?.[1])).toBe(check!.bodies.length);
       }
   });
 });
@@ -64,8 +67,8 @@ describe.runIf(canRun('prusa-slicer'))('PrusaSlicer', () => {
       const report = run('prusa-slicer', '--info', ...files.map(({ path }) => path));
       expect(report.match(/^manifold = yes$/gm)).toHaveLength(count);
       const volumes = [...report.matchAll(/^volume = ([\d.]+)$/gm)].map(([, volume]) => Number(volume));
-      files.forEach(({ check }, i) => {
-        expect(Math.abs(volumes[i]! / check.volume - 1)).toBeLessThan(1e-4);
+      files.forEach(({ checks: [check] }, i) => {
+        expect(Math.abs(volumes[i]! / check!.volume - 1)).toBeLessThan(1e-4);
       });
     },
   );
@@ -87,9 +90,9 @@ describe.runIf(canRun('prusa-slicer'))('PrusaSlicer', () => {
     run('prusa-slicer', '--export-gcode', ...support, '-o', gcode, file!.path);
     const moves = readFileSync(gcode, 'utf8');
     const used = Number(/filament used \[cm3\] = ([\d.]+)/.exec(moves)?.[1]);
-    expect(used * 1000).toBeGreaterThan(0.95 * file!.check.volume);
+    expect(used * 1000).toBeGreaterThan(0.95 * file!.checks[0]!.volume);
     const heights = [...moves.matchAll(/^;Z:([\d.]+)/gm)].map(([, z]) => Number(z));
-    const { min, max } = file!.check.extents;
+    const { min, max } = file!.checks[0]!.extents;
     expect(Math.max(...heights)).toBeGreaterThan(max[2] - min[2] - 0.5);
   });
 });

@@ -39,7 +39,7 @@ describe('fused rods', () => {
   it('make one body that reaches as far out as asked', async () => {
     const { parts, files } = await make(printed(cuboctahedron, { size: 60, axes: { orders: [4], reach: 15 } }));
     expect(parts).toHaveLength(1);
-    expect(files[0]!.check.bodies).toHaveLength(1);
+    expect(files[0]!.checks[0]!.bodies).toHaveLength(1);
     for (const extent of extents(parts[0]!.mesh)) expect(extent).toBeCloseTo(60 + 2 * 15, 3);
   });
 
@@ -47,7 +47,7 @@ describe('fused rods', () => {
     const size = 60;
     const bare = await make(printed(cuboctahedron, { size }));
     const rodded = await make(printed(cuboctahedron, { size, axes: { orders: [4], diameter: 4, reach: 20 } }));
-    const added = rodded.files[0]!.check.volume - bare.files[0]!.check.volume;
+    const added = rodded.files[0]!.checks[0]!.volume - bare.files[0]!.checks[0]!.volume;
     // Six shafts of 16 mm with 24 sides, inscribed in 4 mm circles, and six square plates 4 mm thick with the hollow of 4/m.
     const ring = (sides: number, radius: number): number => (sides / 2) * radius ** 2 * Math.sin((2 * Math.PI) / sides);
     const plate = 2 * (2.5 * 4) ** 2 * 4 - ring(24, 0.95 * 4) * 0.4 * 4;
@@ -147,7 +147,7 @@ describe('the size', () => {
     const cube: RecipeInput = { pointGroup: 'm-3m', forms: [{ face: '100', distance: 1 }], print: { size } };
     const made = await make(cube);
     expect(made.millimetresPerUnit).toBeCloseTo(scale, 10);
-    expect(made.files[0]!.check.volume).toBeCloseTo((2 * scale) ** 3, 1);
+    expect(made.files[0]!.checks[0]!.volume).toBeCloseTo((2 * scale) ** 3, 1);
   });
 
   it('of rhombohedral and hexagonal axes is the same crystal', async () => {

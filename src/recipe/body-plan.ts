@@ -1,0 +1,67 @@
+import { parseFace, readOptions } from '../crystal/indices.ts';
+import type { PointGroup } from '../crystal/point-group.ts';
+import type { BluntPlan, BodyPlan, LettersPlan, StandPlan } from './crystal.ts';
+import { bounded } from './print-plan.ts';
+import { type Millimetres, mm, readLength } from './quantity.ts';
+import type { BluntInput, BodyInput, FaceInput, LettersInput, StandInput } from './schema.ts';
+
+/** Width of the gap that lets pieces of a crystal part from each other, millimetres (see the printer profiles). */
+const USUAL_GAP = mm(0.2);
+/** Rounding when blunting is asked for without a figure: ideal corners then reach at most 0.20 mm into the gauge. */
+const USUAL_RADIUS = mm(0.75);
+
+const lengthOr = <T>(value: number | string | undefined, otherwise: T): Millimetres | T =>
+  value === undefined ? otherwise : bounded(readLength(value), 'a length');
+
+/** @throws CrystalError, QuantityError */
+export function readBody(input: BodyInput, group: PointGroup | undefined): BodyPlan {
+  const given = typeof input === 'string' ? { kind: input } : input;
+  switch (given.kind) {
+    case 'solid':
+      return { kind: 'solid' };
+    case 'hollow': {
+      const { wall, drains = null } = 'wall' in given || 'drains' in given ? given : {};
+      return { kind: 'hollow', wall: lengthOr(wall, null), drains };
+    }
+    case 'frame': {
+      const { strut, bead = false } = 'strut' in given || 'bead' in given ? given : {};
+      return { kind: 'frame', strut: lengthOr(strut, null), bead };
+    }
+    case 'halves': {
+      const { plane, join = 'dowels' } = 'plane' in given || 'join' in given ? given : {};
+      return { kind: 'halves', plane: plane === undefined ? null : faceOf(plane, group), join };
+    }
+    case 'sectors': {
+      const { by = 'face', gap } = 'by' in given || 'gap' in given ? given : {};
+      return { kind: 'sectors', by, gap: lengthOr(gap, USUAL_GAP) };
+    }
+    case 'units': {
+      const { gap } = 'gap' in given ? given : {};
+      return { kind: 'units', gap: lengthOr(gap, USUAL_GAP) };
+    }
+  }
+}
+
+const faceOf = (input: FaceInput, group: PointGroup | undefined) =>
+  parseFace(Array.isArray(input) ? input : String(input), readOptions(group?.axes ?? 'hexagonal'));
+
+export function readLetters(input: LettersInput): LettersPlan | null {
+  if (input === false) return null;
+  const { relief = 'engraved', text = 'letters' } = typeof input === 'object' ? input : {};
+  return { relief: typeof input === 'string' ? input : relief, text };
+}
+
+/** @throws QuantityError */
+export function readBlunt(input: BluntInput): BluntPlan | null {
+  if (input === false) return null;
+  if (typeof input !== 'object')
+    return { kind: 'round', radius: lengthOr(input === true ? undefined : input, USUAL_RADIUS) };
+  if (input.bevel !== undefined) return { kind: 'bevel', width: lengthOr(input.bevel, USUAL_RADIUS) };
+  return { kind: 'round', radius: lengthOr(input.radius, USUAL_RADIUS) };
+}
+
+export function readStand(input: StandInput): StandPlan | null {
+  if (input === false) return null;
+  const { text = null, braille = true, qr = null } = typeof input === 'object' ? input : {};
+  return { text, braille, qr };
+}
