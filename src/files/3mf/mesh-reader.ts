@@ -18,11 +18,10 @@ export class MeshReader {
   vertex(attributes: Attributes): void {
     for (const axis of ['x', 'y', 'z']) {
       const value = numberIn(attributes.get(axis));
-      if (Number.isNaN(value))
-        throw fault(
-          'notFinite',
-          `In ${this.object}, ${axis} of vertex ${this.positions.length / 3} is no number: "${attributes.get(axis) ?? ''}".`,
-        );
+      if (Number.isNaN(value)) {
+        const where = `In ${this.object}, ${axis} of vertex ${Math.floor(this.positions.length / 3)}`;
+        throw fault('notFinite', `${where} is no number: "${attributes.get(axis) ?? ''}".`);
+      }
       this.positions.push(value);
     }
   }
@@ -30,11 +29,11 @@ export class MeshReader {
   triangle(attributes: Attributes): void {
     for (const corner of ['v1', 'v2', 'v3']) {
       const vertex = indexIn(attributes.get(corner));
-      if (!(vertex < this.positions.length / 3))
-        throw fault(
-          'index',
-          `In ${this.object}, triangle ${this.triangles.length / 3} names vertex "${attributes.get(corner) ?? ''}"; vertices are numbered from 0 to ${this.positions.length / 3 - 1}.`,
-        );
+      if (!(vertex < this.positions.length / 3)) {
+        const where = `In ${this.object}, triangle ${Math.floor(this.triangles.length / 3)}`;
+        const [named, last] = [attributes.get(corner) ?? '', this.positions.length / 3 - 1];
+        throw fault('index', `${where} names vertex "${named}"; vertices are numbered from 0 to ${last}.`);
+      }
       this.triangles.push(vertex);
     }
     if (attributes.size > 3) this.paint(attributes);

@@ -18,7 +18,7 @@ export interface ThreeMfObject {
 export interface ThreeMfModel {
   readonly title: string;
   readonly description: string;
-  /** Program and version, as in `Goniolith 0.1.0`. Names of other programs switch some readers to rules of their own. */
+  /** Program and version, as in `Goniolith 0.1.0`; the name of another program changes how some readers read. */
   readonly application: string;
   /** Further facts under names of letters and digits; written as `goniolith:Name`. */
   readonly metadata: Readonly<Record<string, string>>;

@@ -1,4 +1,4 @@
-/** Paths, types and namespaces of a 3MF package: 3MF Core Specification 1.4.0, sections 2.1, 2.2, 6.1 and appendix C. */
+/** Paths, types and namespaces of a package: 3MF Core Specification 1.4.0, sections 2.1, 2.2, 6.1 and appendix C. */
 
 export const CONTENT_TYPES_PATH = '[Content_Types].xml';
 export const RELATIONSHIPS_PATH = '_rels/.rels';

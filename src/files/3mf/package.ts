@@ -14,6 +14,8 @@ import { unpack, type ZipEntry, zipEntries } from './zip.ts';
 export interface ThreeMfPackage {
   readonly modelPath: string;
   readonly model: Uint8Array;
+  /** Another model part by its absolute path. @throws FileError `missingPart`, `contentType`, and those of unpacking */
+  readonly otherModel: (path: string) => Uint8Array;
 }
 
 /**
@@ -39,10 +41,14 @@ export function openPackage(bytes: Uint8Array): ThreeMfPackage {
       'A 3MF file has one relationship of the type "3dmodel"; save the model again as 3MF.',
     );
   const modelPath = start[0]!.path;
-  const model = part(entries, modelPath);
-  demandType(typeOf, modelPath, MODEL_TYPE);
+  const modelAt = (path: string): Uint8Array => {
+    const entry = part(entries, path);
+    demandType(typeOf, path, MODEL_TYPE);
+    return unpack(bytes, entry);
+  };
+  const model = modelAt(modelPath);
   for (const { type, path } of relationships) if (type === THUMBNAIL_RELATIONSHIP) part(entries, path);
-  return { modelPath, model: unpack(bytes, model) };
+  return { modelPath, model, otherModel: (path) => modelAt(path.replace(/^\//, '')) };
 }
 
 function part(entries: ReadonlyMap<string, ZipEntry>, path: string): ZipEntry {

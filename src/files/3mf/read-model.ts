@@ -8,13 +8,17 @@ import { type Attributes, scanXml, type XmlListener } from './xml-scan.ts';
 /**
  * Reads a model part strictly: known unit, every reference to something defined before it, complete meshes. Elements of
  * extensions are passed over, unless the file says that it cannot be understood without them.
+ * @param otherPart reads another part of the package; left out for those, which must not lead on
  * @throws FileError `syntax`, `unit`, `index`, `transform`, `unsupported`, `metadata`
  */
-export function readModelPart(bytes: Uint8Array, part: string): ModelPart {
-  const reader = new ModelReader();
+export function readModelPart(bytes: Uint8Array, part: string, otherPart?: OtherPart): ModelPart {
+  const reader = new ModelReader(otherPart);
   scanXml(bytes, part, reader);
   return reader.model;
 }
+
+/** Another model part by its path: the production extension lets assemblies take objects from there. */
+export type OtherPart = (path: string) => ModelPart;
 
 /** Where each element of the core stands; an empty name is the root. */
 const PARENT: Readonly<Record<string, string>> = {
@@ -60,6 +64,8 @@ class ModelReader implements XmlListener {
   private components: Placement[] | undefined;
   private metadataName: string | undefined;
 
+  constructor(private readonly otherPart: OtherPart | undefined) {}
+
   open(name: string, attributes: Attributes, namespaces: ReadonlyMap<string, string>): void {
     if (this.skipped > 0 || !this.known(name)) {
       this.skipped++;
@@ -72,8 +78,7 @@ class ModelReader implements XmlListener {
     else if (name === 'core:metadata') this.openMetadata(attributes.get('name') ?? '');
     else if (name in GROUPS) this.openGroup(attributes);
     else if (name === 'core:object') this.openObject(attributes);
-    else if (name === 'core:mesh') this.mesh = new MeshReader(this.describe(), this.properties);
-    else if (name === 'core:components') this.components = [];
+    else if (name === 'core:mesh' || name === 'core:components') this.openBody(name);
     else if (name === 'core:component')
       this.components!.push(this.placement(attributes, `a component of ${this.describe()}`));
     else if (name === 'core:item')
@@ -156,6 +161,12 @@ class ModelReader implements XmlListener {
     this.defaults = attributes;
   }
 
+  private openBody(name: string): void {
+    if (this.mesh || this.components) throw fault('syntax', `${this.describe()} holds more than one mesh or assembly.`);
+    if (name === 'core:mesh') this.mesh = new MeshReader(this.describe(), this.properties);
+    else this.components = [];
+  }
+
   private closeObject(): void {
     const [object, what] = [this.object!, this.describe()];
     if ((this.mesh === undefined) === (this.components === undefined))
@@ -175,14 +186,24 @@ class ModelReader implements XmlListener {
   }
 
   private placement(attributes: Attributes, where: string): Placement {
-    if (attributes.has('p:path'))
-      throw fault('unsupported', `${where} takes its object from another part of the package, which is not read here.`);
-    const object = this.model.objects.get(indexIn(attributes.get('objectid')));
+    const object = this.objectsAt(attributes.get('p:path'), where).get(indexIn(attributes.get('objectid')));
     if (object) return { object, transform: parseTransform(attributes.get('transform'), where) };
     throw fault(
       'index',
       `${where} names object "${attributes.get('objectid') ?? ''}", which is not defined before it.`,
     );
+  }
+
+  private objectsAt(path: string | undefined, where: string): ReadonlyMap<number, ObjectResource> {
+    if (path === undefined) return this.model.objects;
+    if (!this.otherPart)
+      throw fault(
+        'unsupported',
+        `${where} leads from one part of the package on to another, which 3MF does not allow.`,
+      );
+    const { objects, unit } = this.otherPart(path);
+    if (unit === this.model.unit) return objects;
+    throw fault('unit', `${where} takes an object in the unit ${unit} into a model in the unit ${this.model.unit}.`);
   }
 
   private describe(): string {

@@ -47,13 +47,18 @@ const DEEPEST = 100;
  * `unit`, `index`, `transform`, `unsupported`, `metadata`
  */
 export function read3mf(bytes: Uint8Array): ThreeMfContents {
-  const { model: part, modelPath } = openPackage(bytes);
-  const model = readModelPart(part, modelPath);
-  const reached = new Set<number>();
+  const { model: part, modelPath, otherModel } = openPackage(bytes);
+  const others = new Map<string, ModelPart>();
+  const model = readModelPart(part, modelPath, (path) => {
+    const other = others.get(path) ?? readModelPart(otherModel(path), path);
+    others.set(path, other);
+    return other;
+  });
+  const reached = new Set<ObjectResource>();
   const objects = placedObjects(model, reached);
   if (objects.length === 0)
     throw new FileError('empty', 'The 3MF file places no object on the bed.', 'Save the model again with its parts.');
-  const unused = [...model.objects.values()].filter(({ id }) => !reached.has(id));
+  const unused = [...model.objects.values()].filter((object) => !reached.has(object));
   return {
     objects,
     unit: model.unit,
@@ -62,22 +67,22 @@ export function read3mf(bytes: Uint8Array): ThreeMfContents {
   };
 }
 
-function placedObjects({ items, unit }: ModelPart, reached: Set<number>): PlacedObject[] {
+function placedObjects({ items, unit }: ModelPart, reached: Set<ObjectResource>): PlacedObject[] {
   const scale = MILLIMETRES[unit]!;
-  const meshes = new Map<number, Mesh>();
+  const meshes = new Map<ObjectResource, Mesh>();
   const found: PlacedObject[] = [];
   const place = (object: ObjectResource, transform: Transform, assembly: string, depth: number): void => {
-    reached.add(object.id);
+    reached.add(object);
     if (depth > DEEPEST) throw fault('tooLarge', `Its assemblies are nested more than ${DEEPEST} deep.`);
     const name = object.name || assembly;
-    const { id, body, partNumber, type } = object;
+    const { body, partNumber, type } = object;
     if (!isMesh(body)) {
       for (const part of body) place(part.object, chain(part.transform, transform), name, depth + 1);
       return;
     }
     if (found.length >= MOST_BODIES) throw fault('tooLarge', `Its assemblies make more than ${MOST_BODIES} bodies.`);
-    const mesh = meshes.get(id) ?? inMillimetres(body, scale);
-    meshes.set(id, mesh);
+    const mesh = meshes.get(object) ?? inMillimetres(body, scale);
+    meshes.set(object, mesh);
     const shifted = transform.map((value, i) => (i < 9 ? value : value * scale));
     found.push({ name, partNumber, type, mesh, transform: shifted });
   };

@@ -3,8 +3,8 @@ import { FileError } from '../file-error.ts';
 import { numberIn } from './number-text.ts';
 
 /**
- * Twelve numbers of a 3MF matrix by rows, m00 m01 m02 m10 … m32, for row vectors: x' = x m00 + y m10 + z m20 + m30 and
- * so on; the last three are a shift (3MF core 1.4.0, section 3.3).
+ * Twelve numbers of a 3MF matrix by rows, m00 m01 m02 m10 … m32, for row vectors: x' = x m00 + y m10 + z m20 + m30,
+ * and so on; the last three are a shift (3MF core 1.4.0, section 3.3).
  */
 export type Transform = readonly number[];
 

@@ -39,8 +39,9 @@ function decode(bytes: Uint8Array, part: string): string {
   }
 }
 
-const NAME = /[\p{L}_:][\p{L}\p{N}\p{M}_:.·-]*/uy;
-const ATTRIBUTE = /\s+([\p{L}_:][\p{L}\p{N}\p{M}_:.·-]*)\s*=\s*(?:"([^"<]*)"|'([^'<]*)')/uy;
+/** Wider than XML allows beyond ASCII, which does no harm: names are only compared. */
+const NAME = /[A-Za-z_:\u00b7-\uffff][\w:.\u00b7-\uffff-]*/y;
+const ATTRIBUTE = /\s+([A-Za-z_:\u00b7-\uffff][\w:.\u00b7-\uffff-]*)\s*=\s*(?:"([^"<]*)"|'([^'<]*)')/y;
 const TAG_END = /\s*(\/?)>/y;
 const CLOSE = /\s*>/y;
 /** What stands for a character: one of five names or a number; any other "&" is a fault. */
@@ -116,7 +117,7 @@ class XmlScan {
     if (raw === undefined) throw this.fault('a "<" begins no element');
     const written = this.attributes();
     const end = this.match(TAG_END, this.at);
-    if (!end) throw this.fault(`<${raw}> has an attribute that cannot be read`);
+    if (!end) throw this.fault(`the tag <${raw}> does not end or has an attribute that cannot be read`);
     const outer = this.scope;
     if (this.prefixed) this.scope = inner(outer, written);
     const name = this.resolve(raw, true);

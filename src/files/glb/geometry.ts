@@ -1,5 +1,5 @@
 import type { Mesh } from '../../print/mesh.ts';
-import type { FlatFaces } from '../picture/flat-faces.ts';
+import type { Creases, FlatFaces } from '../picture/flat-faces.ts';
 
 /** Arrays of a primitive: metres, Y up. */
 export interface Geometry {
@@ -7,7 +7,7 @@ export interface Geometry {
   readonly indices: Uint16Array<ArrayBuffer> | Uint32Array<ArrayBuffer>;
 }
 
-/** The triangles of one surface, with vertices of their own for each flat face, because each has a normal of its own. */
+/** The triangles of one surface; each flat face has vertices of its own, because it has a normal of its own. */
 export function facesOf(
   mesh: Mesh,
   faces: FlatFaces,
@@ -43,8 +43,8 @@ export function facesOf(
   };
 }
 
-/** The edges between faces that are not flush, as pairs. */
-export function edgesOf({ positions: p }: Mesh, { creases }: FlatFaces): Geometry {
+/** Edges as pairs of vertices. */
+export function edgesOf({ positions: p }: Mesh, { creases }: Creases): Geometry {
   const number = new Map<number, number>();
   const indices = creases.map((vertex) => {
     const known = number.get(vertex) ?? number.size;

@@ -1,9 +1,8 @@
-import { Document, type Material, type TypedArray, WebIO } from '@gltf-transform/core';
+import { Document, type Material, type TypedArray, VertexLayout, WebIO } from '@gltf-transform/core';
 import type { Mesh } from '../../print/mesh.ts';
-import type { Surface } from '../../print/part.ts';
 import { assertFinite, assertNotEmpty, assertWholeMesh } from '../mesh/sound-mesh.ts';
 import { channels, linear } from '../picture/colour.ts';
-import { flatFaces } from '../picture/flat-faces.ts';
+import { drawnEdges, flatFaces, type SeenSurface } from '../picture/flat-faces.ts';
 import { edgesOf, facesOf } from './geometry.ts';
 
 /** One body of a scene, where it is to stand. */
@@ -12,7 +11,7 @@ export interface GlbObject {
   /** Millimetres, Z up. */
   readonly mesh: Mesh;
   /** What the numbers in the mesh's `surface` mean; without these numbers all is the first surface. Never empty. */
-  readonly surfaces: readonly Surface[];
+  readonly surfaces: readonly SeenSurface[];
 }
 
 export interface GlbModel {
@@ -59,7 +58,7 @@ export async function writeGlb({ title, application, objects, ink = INK }: GlbMo
       primitive.setAttribute('NORMAL', accessor(document, normals, 'VEC3'));
       body.addPrimitive(primitive.setIndices(accessor(document, indices, 'SCALAR')));
     });
-    const { positions, indices } = edgesOf(mesh, faces);
+    const { positions, indices } = edgesOf(mesh, drawnEdges(faces, surfaces));
     if (indices.length > 0) {
       const lines = document.createPrimitive().setMode(LINES).setMaterial(paint('edges', ink));
       lines.setName('edges').setAttribute('POSITION', accessor(document, positions, 'VEC3'));
@@ -67,7 +66,7 @@ export async function writeGlb({ title, application, objects, ink = INK }: GlbMo
     }
     scene.addChild(document.createNode(name).setMesh(body));
   }
-  return new WebIO().writeBinary(document);
+  return new WebIO().setVertexLayout(VertexLayout.SEPARATE).writeBinary(document);
 }
 
 const accessor = (document: Document, array: TypedArray, type: 'VEC3' | 'SCALAR') =>

@@ -1,20 +1,36 @@
 import type { Mesh } from '../../print/mesh.ts';
+import type { Surface } from '../../print/part.ts';
 import { endOf, startOf, triangleOf, visitEdges } from '../mesh/half-edges.ts';
 
 /** A mesh's triangles gathered to flat faces of one surface each, and the edges between those that are not flush. */
-export interface FlatFaces {
+export interface FlatFaces extends Creases {
   /** The face of each triangle. */
   readonly faceOf: Uint32Array;
+  /** The surface of each face. */
+  readonly surfaceOf: Uint16Array;
   /** Unit outward normal of each face, three numbers a face. */
   readonly normals: Float64Array;
   /** Triangles in the order of their faces. */
   readonly order: Uint32Array;
+}
+
+/** A surface as it is to be seen. */
+export interface SeenSurface extends Surface {
+  /** Its triangles stand for something round, as a rod's do: small steps between them get no edge line. */
+  readonly curved?: boolean;
+}
+
+export interface Creases {
   /** Pairs of vertex numbers: edges where the faces on either side differ by more than a degree. */
   readonly creases: Uint32Array;
+  /** The two faces at each of them. */
+  readonly sides: Uint32Array;
 }
 
 /** Cosine of one degree: below that, faces count as flush and normals as equal. */
 const FLUSH = Math.cos(Math.PI / 180);
+/** The same for facets of a curved surface: twelve of them round a rod still count as round. */
+const ROUND = Math.cos((31 * Math.PI) / 180);
 /** A face takes slivers whatever their normals say, if they lie within this share of the mesh's size of its plane. */
 const FLAT = 1e-6;
 
@@ -24,33 +40,58 @@ const FLAT = 1e-6;
  * a normal that can be trusted.
  */
 export function flatFaces(mesh: Mesh): FlatFaces {
+  const faces = known.get(mesh) ?? growFaces(mesh);
+  known.set(mesh, faces);
+  return faces;
+}
+
+/** A picture and a scene of the same meshes need the same faces. */
+const known = new WeakMap<Mesh, FlatFaces>();
+
+function growFaces(mesh: Mesh): FlatFaces {
   const count = mesh.triangles.length / 3;
   const { normals: own, areas } = triangleNormals(mesh);
-  const mates = neighbours(mesh);
+  const mates = mateHalfEdges(mesh);
   const near = FLAT * sizeOf(mesh) + 1e-9;
-  const seeds = Uint32Array.from({ length: count }, (_, t) => t).sort((s, t) => areas[t]! - areas[s]! || s - t);
+  const seeds = byArea(areas);
   const faceOf = new Uint32Array(count).fill(count);
   const order = new Uint32Array(count);
   const normals: number[] = [];
+  const surfaces: number[] = [];
   let end = 0;
   for (const seed of seeds) {
     if (faceOf[seed] !== count) continue;
     const face = normals.length / 3;
     const plane = planeOf(mesh, own, seed);
     normals.push(plane[0], plane[1], plane[2]);
+    surfaces.push(mesh.surface?.[seed] ?? 0);
     faceOf[seed] = face;
     let next = end;
     order[end++] = seed;
     for (; next < end; next++)
       for (let corner = 0; corner < 3; corner++) {
-        const mate = mates[3 * order[next]! + corner]!;
+        const mate = triangleOf(mates[3 * order[next]! + corner]!);
         if (mate >= count || faceOf[mate] !== count || mesh.surface?.[mate] !== mesh.surface?.[seed]) continue;
         if (!joins(mesh, own, mate, plane, near)) continue;
         faceOf[mate] = face;
         order[end++] = mate;
       }
   }
-  return { faceOf, normals: Float64Array.from(normals), order, creases: creasesOf(mesh, faceOf, normals) };
+  const surfaceOf = Uint16Array.from(surfaces);
+  return { faceOf, surfaceOf, normals: Float64Array.from(normals), order, ...creasesOf(mesh, faceOf, normals, mates) };
+}
+
+/** The creases to draw: all but the small steps within a curved surface. */
+export function drawnEdges(faces: FlatFaces, surfaces: readonly SeenSurface[]): Creases {
+  if (!surfaces.some(({ curved }) => curved)) return faces;
+  const { creases, sides, surfaceOf, normals: n } = faces;
+  const drawn = (_: number, k: number): boolean => {
+    const [face, other] = [sides[k & ~1]!, sides[k | 1]!];
+    if (face === other || surfaceOf[face] !== surfaceOf[other] || !surfaces[surfaceOf[face]!]?.curved) return true;
+    const [i, j] = [3 * face, 3 * other];
+    return n[i]! * n[j]! + n[i + 1]! * n[j + 1]! + n[i + 2]! * n[j + 2]! < ROUND;
+  };
+  return { creases: creases.filter(drawn), sides: sides.filter(drawn) };
 }
 
 /** Unit normal and distance from the origin. */
@@ -101,27 +142,42 @@ function triangleNormals({ positions: p, triangles }: Mesh): { normals: Float64A
   return { normals, areas };
 }
 
-/** For each half-edge the triangle on its other side; the count of triangles where there is not exactly one. */
-function neighbours(mesh: Mesh): Uint32Array {
-  const count = mesh.triangles.length / 3;
-  const mates = new Uint32Array(mesh.triangles.length).fill(count);
-  visitEdges(mesh, new Uint8Array(count), (uses) => {
+/** For each half-edge the one that runs against it; their count where there is not exactly one. */
+function mateHalfEdges(mesh: Mesh): Uint32Array {
+  const count = mesh.triangles.length;
+  const mates = new Uint32Array(count).fill(count);
+  visitEdges(mesh, new Uint8Array(count / 3), (uses) => {
     if (uses.length !== 2) return;
-    mates[uses[0]!] = triangleOf(uses[1]!);
-    mates[uses[1]!] = triangleOf(uses[0]!);
+    mates[uses[0]!] = uses[1]!;
+    mates[uses[1]!] = uses[0]!;
   });
   return mates;
 }
 
-function creasesOf(mesh: Mesh, faceOf: Uint32Array, n: readonly number[]): Uint32Array {
+/** Triangles by falling area, equal ones in their order: one key a triangle, so that numbers are sorted as numbers. */
+function byArea(areas: Float64Array): Uint32Array {
+  const count = areas.length;
+  const most = areas.reduce((value, area) => Math.max(value, area), Number.MIN_VALUE);
+  const steps = Math.floor(2 ** 52 / (count + 1));
+  const keys = areas.map((area, t) => (steps - Math.floor((area / most) * steps)) * count + t).sort();
+  return Uint32Array.from(keys, (key) => key % count);
+}
+
+function creasesOf(mesh: Mesh, faceOf: Uint32Array, n: readonly number[], mates: Uint32Array): Creases {
   const creases: number[] = [];
-  visitEdges(mesh, new Uint8Array(faceOf.length), (uses) => {
-    const [i, j] = [3 * faceOf[triangleOf(uses[0]!)]!, 3 * faceOf[triangleOf(uses.at(-1)!)]!];
-    if (i === j && uses.length === 2) return;
-    if (n[i]! * n[j]! + n[i + 1]! * n[j + 1]! + n[i + 2]! * n[j + 2]! > FLUSH && uses.length === 2) return;
-    creases.push(startOf(mesh, uses[0]!), endOf(mesh, uses[0]!));
-  });
-  return Uint32Array.from(creases);
+  const sides: number[] = [];
+  for (let h = 0; h < mates.length; h++) {
+    const mate = mates[h]!;
+    if (mate < h) continue;
+    const face = faceOf[triangleOf(h)]!;
+    const other = mate < mates.length ? faceOf[triangleOf(mate)]! : face;
+    const [i, j] = [3 * face, 3 * other];
+    const flush = face === other || n[i]! * n[j]! + n[i + 1]! * n[j + 1]! + n[i + 2]! * n[j + 2]! > FLUSH;
+    if (flush && mate < mates.length) continue;
+    creases.push(startOf(mesh, h), endOf(mesh, h));
+    sides.push(face, other);
+  }
+  return { creases: Uint32Array.from(creases), sides: Uint32Array.from(sides) };
 }
 
 function sizeOf({ positions }: Mesh): number {

@@ -6,7 +6,10 @@ const EIGHT_BIT_RGBA = [8, 6, 0, 0, 0];
 /** Each pixel as its difference from the one above: evenly coloured faces become zeros. */
 const FILTER_UP = 2;
 
-/** A PNG picture (W3C PNG Specification, third edition). @param rgba four bytes a pixel, rows from the top, alpha not premultiplied */
+/**
+ * A PNG picture (W3C PNG Specification, third edition).
+ * @param rgba four bytes a pixel, rows from the top, alpha not premultiplied
+ */
 export function encodePng(rgba: Uint8Array, width: number, height: number): Uint8Array {
   const row = 4 * width;
   const lines = new Uint8Array(height * (row + 1));

@@ -41,7 +41,7 @@ export class Raster {
       for (let x = left; x <= right; x++) {
         const [px, py] = [x + 0.5 - ax, y + 0.5 - ay];
         const along = long > 0 ? Math.min(1, Math.max(0, (px * dx + py * dy) / long)) : 0;
-        if (Math.hypot(px - along * dx, py - along * dy) > half) continue;
+        if ((px - along * dx) ** 2 + (py - along * dy) ** 2 > half * half) continue;
         // The faces on both sides reach nearer than the line by their slope within its width.
         const place = y * this.side + x;
         if (az + along * dz < this.depth[place]! - 3 * half) continue;

@@ -1,14 +1,13 @@
 import type { Mesh } from '../../print/mesh.ts';
-import type { Surface } from '../../print/part.ts';
 import { channels } from './colour.ts';
-import { flatFaces } from './flat-faces.ts';
+import { drawnEdges, flatFaces, type SeenSurface } from './flat-faces.ts';
 import { encodePng } from './png.ts';
 import { Raster } from './raster.ts';
 
 export interface PictureObject {
   /** Millimetres, Z up. */
   readonly mesh: Mesh;
-  readonly surfaces: readonly Surface[];
+  readonly surfaces: readonly SeenSurface[];
 }
 
 export interface ThumbnailOptions {
@@ -55,10 +54,15 @@ export function thumbnailPng(objects: readonly PictureObject[], options: Thumbna
     }
   });
   const line = channels(ink);
-  objects.forEach((_, i) => {
+  objects.forEach(({ surfaces }, i) => {
     const points = seen[i]!.map(fit);
-    const { creases } = faces[i]!;
-    for (let k = 0; k < creases.length; k += 2) raster.line(points, creases[k]!, creases[k + 1]!, LINE * side, line);
+    const { creases, sides } = drawnEdges(faces[i]!, surfaces);
+    const { normals } = faces[i]!;
+    const away = (face: number): boolean =>
+      dot([normals[3 * face]!, normals[3 * face + 1]!, normals[3 * face + 2]!], frame.toward) <= 0;
+    for (let k = 0; k < creases.length; k += 2)
+      if (!away(sides[k]!) || !away(sides[k + 1]!))
+        raster.line(points, creases[k]!, creases[k + 1]!, LINE * side, line);
   });
   return encodePng(raster.reduced(FINE, ground === undefined ? undefined : channels(ground)), size, size);
 }
@@ -90,7 +94,7 @@ function project(p: Float64Array, { right, up, toward }: Frame): Float64Array {
   return seen;
 }
 
-/** Maps projected coordinates, by their index, to samples of the picture: x to the right, y downwards, depth nearer larger. */
+/** Maps projected coordinates, by their index, to samples: x to the right, y downwards, depth greater when nearer. */
 function fitInto(seen: readonly Float64Array[], side: number): (value: number, index: number) => number {
   const low: [number, number] = [Infinity, Infinity];
   const high: [number, number] = [-Infinity, -Infinity];
