@@ -5,7 +5,7 @@ import { parseFace, readOptions } from './crystal/indices.ts';
 import { interfacialAngle as angleBetween } from './crystal/interfacial.ts';
 import { type PointGroup, pointGroup } from './crystal/point-group.ts';
 import { type Inspection, inspection } from './inspect.ts';
-import { type Made, makeModel } from './make.ts';
+import { type Made, type ModelSupplies, makeModel } from './make.ts';
 import type { Crystal, Resolved } from './recipe/crystal.ts';
 import { read } from './recipe/read.ts';
 import type { RecipeInput } from './recipe/schema.ts';
@@ -30,9 +30,9 @@ export interface Library {
 
 /**
  * The library on a shelf of presets; runs in browsers as in Node.
- * @param application program and version, for files that state what made them
+ * @param supplies the typeface for letters, and what files are to state as the program that made them
  */
-export function library(shelf: Shelf, application = 'Goniolith'): Library {
+export function library(shelf: Shelf, supplies: ModelSupplies): Library {
   const resolved = (recipe: Recipe): Resolved => read(recipe, shelf);
   return {
     crystal: (recipe) => resolved(recipe).crystal,
@@ -40,7 +40,7 @@ export function library(shelf: Shelf, application = 'Goniolith'): Library {
       const whole = resolved(recipe);
       return inspection(whole, polyhedron(whole.crystal));
     },
-    make: async (recipe) => makeModel(resolved(recipe), application),
+    make: async (recipe) => makeModel(resolved(recipe), supplies),
   };
 }
 

@@ -1,9 +1,10 @@
 import { glbFile, type MadeFile, stlFiles, threeMfFile } from './model-files.ts';
+import type { ModelFinding } from './print/examined.ts';
 import { extentsOf } from './print/mesh.ts';
 import { assemble, type Part } from './print/part.ts';
-import { printedParts } from './print/parts.ts';
+import { printedParts, type Supplies } from './print/parts.ts';
 import type { Resolved } from './recipe/crystal.ts';
-import { LARGEST_SIZE, USUAL_SIZE } from './recipe/print-plan.ts';
+import { allAxes, LARGEST_SIZE, USUAL_SIZE } from './recipe/print-plan.ts';
 import type { PrinterProfile } from './recipe/schema.ts';
 import { closedOrThrow } from './shape/closing.ts';
 import { ObjectError } from './shape/object-error.ts';
@@ -19,27 +20,80 @@ export interface Made {
   readonly files: readonly MadeFile[];
   /** Sentences for the person who prints: decisions taken, cautions. */
   readonly remarks: readonly string[];
+  /** Sentences about what could do harm. */
+  readonly warnings: readonly string[];
+  /** What to know before printing and handling; only where the recipe asks for checks. */
+  readonly findings: readonly ModelFinding[];
+}
+
+export interface ModelSupplies extends Supplies {
+  /** Program and version, as files that have a place for it state it. */
+  readonly application: string;
 }
 
 /**
  * From a resolved recipe to printable files in memory: solves the polyhedron, builds the parts, writes each file, reads
  * it back and checks it.
- * @param application program and version, as files that have a place for it state it
  * @throws ObjectError when the crystal is open, cannot carry what is asked, or a file fails its own check
  */
-export async function makeModel(resolved: Resolved, application: string): Promise<Made> {
+export async function makeModel(resolved: Resolved, supplies: ModelSupplies): Promise<Made> {
+  return resolved.print.pair ? makePair(resolved, supplies) : makeOne(resolved, supplies);
+}
+
+/** Two copies, as teachers and curators ask for: one plain, and one with its symmetry axes and lettered faces. */
+async function makePair(resolved: Resolved, supplies: ModelSupplies): Promise<Made> {
+  const { print } = resolved;
+  const stem = fileStem(resolved);
+  const plain = { ...print, axes: null, letters: null, stand: null, file: `${stem}-plain` };
+  const marked = {
+    ...print,
+    axes: print.axes ?? allAxes(print.printer),
+    letters: print.letters ?? ({ relief: 'engraved', text: 'letters' } as const),
+    file: `${stem}-marked`,
+  };
+  const [first, second] = [
+    await makeOne({ ...resolved, print: plain }, supplies),
+    await makeOne({ ...resolved, print: marked }, supplies),
+  ];
+  return {
+    ...second,
+    files: [...first.files, ...second.files],
+    parts: [...first.parts, ...second.parts],
+    findings: [...first.findings, ...second.findings],
+  };
+}
+
+async function makeOne(resolved: Resolved, supplies: ModelSupplies): Promise<Made> {
   const shape = closedOrThrow(polyhedron(resolved.crystal));
   const { print } = resolved;
   const scale = millimetresPerUnit(shape, print.size ?? USUAL_SIZE);
-  const { parts, remarks } = await printedParts(shape, scale, print);
+  const printed = await printedParts(shape, scale, print, supplies);
+  const { remarks, warnings } = printed;
+  const examining = print.flat || print.checks ? await import('./print/examined.ts') : null;
+  const parts = print.flat && examining ? await examining.laidFlat(printed.parts, print) : printed.parts;
+  const { application } = supplies;
   refuseGiants(parts);
   const stem = fileStem(resolved);
   const files: MadeFile[] = [];
   if (print.files.includes('stl')) files.push(...stlFiles(resolved, parts, stem));
   if (print.files.includes('3mf')) files.push(await threeMfFile(resolved, parts, stem, { application, scale }));
   if (print.files.includes('glb')) files.push(await glbFile(resolved, parts, stem, application));
+  const apart =
+    parts.length > 1 && files[0]?.name === `${stem}-${parts[0]!.name}.stl`
+      ? ['The parts touch in their places, so there is no STL file of the whole; 3MF and GLB show it.']
+      : [];
+  const findings =
+    print.checks && examining ? await examining.examined(parts, shape, scale, print, printed.blunted) : [];
   const bed = parts.flatMap((part) => bedRemark(part, print.printer));
-  return { shape, millimetresPerUnit: scale, parts, files, remarks: [...remarks, ...bed] };
+  return {
+    shape,
+    millimetresPerUnit: scale,
+    parts,
+    files,
+    remarks: [...remarks, ...apart, ...bed],
+    warnings,
+    findings,
+  };
 }
 
 /** The size limit holds for the whole model, rods included. */

@@ -28,7 +28,11 @@ const GENERAL_VIEW = [0.91, 0.35, 0.22] as const;
 /** Relative difference allowed between the volume of what is read back and that of the part in double precision. */
 const VOLUME_TOLERANCE = 1e-5;
 
-/** STL: the whole model, and each part where there are several. @throws ObjectError when a file fails its own check */
+/**
+ * STL: the whole model, and each part where there are several. Parts that touch in their places cannot be one STL file,
+ * in which touching solids have no meaning; then there is none of the whole.
+ * @throws ObjectError when a file fails its own check
+ */
 export function stlFiles({ crystal, print }: Resolved, parts: readonly Part[], stem: string): MadeFile[] {
   const write = (name: string, holds: string, copies: number, mesh: Mesh): MadeFile => {
     const welded = weldFloat32(mesh);
@@ -38,15 +42,14 @@ export function stlFiles({ crystal, print }: Resolved, parts: readonly Part[], s
     const back = readStl(bytes);
     return { name, bytes, holds, copies, checks: [checked(name, back.mesh, mesh, back.normals)] };
   };
-  const whole = ontoBed([assemble(parts)])[0]!;
   const [only, ...others] = parts;
-  const first = write(`${stem}.stl`, others.length === 0 ? only!.purpose : 'all parts in their places', 1, whole);
-  if (others.length === 0) return [first];
-  return [
-    first,
-    ...parts.map((part) => write(`${stem}-${part.name}.stl`, part.purpose, part.placed.length, part.mesh)),
-  ];
+  const whole = ontoBed([assemble(parts)])[0]!;
+  if (others.length === 0) return [write(`${stem}.stl`, only!.purpose, 1, whole)];
+  const each = parts.map((part) => write(`${stem}-${part.name}.stl`, part.purpose, part.placed.length, part.mesh));
+  return partsTouch(whole) ? each : [write(`${stem}.stl`, 'all parts in their places', 1, whole), ...each];
 }
+
+const partsTouch = (whole: Mesh): boolean => !checkMesh(weldFloat32(whole)).ok;
 
 /** 3MF: every body to print as an object of its own, side by side, with colours and a picture. @throws ObjectError */
 export async function threeMfFile(
@@ -115,7 +118,8 @@ export async function glbFile(
   return { name, bytes, holds: 'the finished object for screens', copies: 1, checks };
 }
 
-function checked(name: string, mesh: Mesh, part: Mesh, normals?: Float32Array): MeshReport {
+/** Checks what was read back against the part it was written from. @throws ObjectError */
+export function checked(name: string, mesh: Mesh, part: Mesh, normals?: Float32Array): MeshReport {
   const check = checkMesh(mesh, normals);
   if (!check.ok) throw notSound(name, check.problems.map(({ message }) => message).join(' '));
   const off = Math.abs(check.volume / meshVolume(part) - 1);

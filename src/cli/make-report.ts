@@ -59,6 +59,8 @@ export function makeReport({ crystal }: Resolved, made: Made, folder: string) {
       volume: sum(checks, ({ volume }) => volume),
     })),
     hasRods: withRods !== '' || made.parts.length > 1,
+    warnings: made.warnings,
+    findings: made.findings,
     remarks: [
       ...made.files
         .slice(1)

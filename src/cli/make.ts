@@ -1,13 +1,17 @@
+import { join } from 'node:path';
 import { Command } from 'commander';
 import { naming, UsageError } from './failure.ts';
 import type { PrintFlags } from './print-flags.ts';
 import { json, remark, result } from './say.ts';
-import { VERSION } from './version.ts';
 
 interface MakeFlags extends PrintFlags {
   out: string;
+  beds?: true;
   json?: true;
 }
+
+/** How findings are marked: what cannot be printed, what to change or decide, a measurement. */
+const MARKS = { refuse: 'CANNOT PRINT', warning: 'To decide:', note: 'Measured:' } as const;
 
 /** What every print needs said. */
 const CAUTION = 'Edges and points are sharp as printed';
@@ -31,6 +35,9 @@ export function makeCommand(): Command {
     .option('--blunt [radius]', 'blunt edges and corners')
     .option('--stand', 'a stand with a label in raised letters and braille')
     .option('--pair', 'two copies: one plain, one with axes and lettered faces')
+    .option('--flat', 'parts lie on the face on which they print best')
+    .option('--checks', 'what to know before printing and handling, measured')
+    .option('--beds', 'also all parts of this run laid out on printing beds, as 3MF')
     .option('-f, --files <kinds>', 'stl, 3mf, glb, or several: stl,3mf')
     .option('--text', 'write STL as text instead of binary')
     .option('-n, --name <name>', 'file name without ending')
@@ -43,30 +50,37 @@ export function makeCommand(): Command {
 }
 
 async function make(recipes: string[], flags: MakeFlags): Promise<void> {
-  const [{ recipeFrom }, { makeModel }, { writeFiles }, { printFlags }, { makeReport }] = await Promise.all([
-    import('./recipe-input.ts'),
-    import('../make.ts'),
-    import('../disk/write-files.ts'),
-    import('./print-flags.ts'),
-    import('./make-report.ts'),
-  ]);
+  const [{ recipeFrom }, { makeModel }, { writeFiles }, { printFlags }, { makeReport }, { SUPPLIES }, { bedFiles }] =
+    await Promise.all([
+      import('./recipe-input.ts'),
+      import('../make.ts'),
+      import('../disk/write-files.ts'),
+      import('./print-flags.ts'),
+      import('./make-report.ts'),
+      import('../disk/supplies.ts'),
+      import('../bed-files.ts'),
+    ]);
   const print = printFlags(flags);
   if (flags.name !== undefined && recipes.length > 1) throw new UsageError('--name takes one recipe.');
   const models = [];
   for (const recipe of recipes) {
     const resolved = await recipeFrom(recipe, print);
-    models.push({ resolved, made: await naming(recipe, () => makeModel(resolved, `Goniolith ${VERSION}`)) });
+    models.push({ resolved, made: await naming(recipe, () => makeModel(resolved, SUPPLIES)) });
   }
-  await writeFiles(
-    flags.out,
-    models.flatMap(({ made }) => made.files),
-  );
+  const beds = flags.beds ? await bedFiles(models, SUPPLIES) : [];
+  await writeFiles(flags.out, [...models.flatMap(({ made }) => made.files), ...beds]);
   const reports = models.map(({ resolved, made }) => makeReport(resolved, made, flags.out));
   if (flags.json) return json(recipes.length === 1 ? reports[0] : reports);
+  for (const { name, holds } of beds) {
+    result(join(flags.out, name));
+    remark(`  ${name}: ${holds}.`);
+  }
   for (const report of reports) {
     remark(report.summary);
     for (const file of report.files) result(file.path);
     for (const sentence of report.remarks) remark(`  ${sentence}`);
+    for (const { severity, text } of report.findings) remark(`  ${MARKS[severity]} ${text}`);
+    for (const sentence of report.warnings) remark(`  Warning: ${sentence}`);
   }
   return remark(`  ${CAUTION}${reports.some(({ hasRods }) => hasRods) ? CAUTION_RODS : ''}${CAUTION_END}`);
 }

@@ -18,6 +18,8 @@ export interface PrintFlags {
   blunt?: string | true;
   stand?: true;
   pair?: true;
+  flat?: true;
+  checks?: true;
   files?: string;
 }
 
@@ -41,6 +43,8 @@ export function printFlags(flags: PrintFlags): PrintInput {
     ...(flags.blunt !== undefined && { blunt: flags.blunt }),
     ...(flags.stand && { stand: true }),
     ...(flags.pair && { pair: true }),
+    ...(flags.flat && { flat: true }),
+    ...(flags.checks && { checks: true }),
     ...(flags.files !== undefined && {
       files: flags.files.split(',').map((kind) => oneOf('--files', kind.trim(), FILES)),
     }),

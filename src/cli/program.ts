@@ -1,4 +1,5 @@
 import { Command, CommanderError } from 'commander';
+import { VERSION } from '../disk/supplies.ts';
 import { checkCommand } from './check.ts';
 import { drawCommand } from './draw.ts';
 import { EXIT, report } from './failure.ts';
@@ -7,7 +8,6 @@ import { inspectCommand } from './inspect.ts';
 import { makeCommand } from './make.ts';
 import { presetsCommand } from './presets.ts';
 import { schemaCommand } from './schema.ts';
-import { VERSION } from './version.ts';
 
 /** The command line. Each verb loads what it needs only when it runs, so that help and small answers come at once. */
 function program(): Command {

@@ -19,6 +19,8 @@ export interface Surface {
   readonly name: string;
   /** #RRGGBB, sRGB. */
   readonly colour: string;
+  /** Facets that stand for something round: pictures draw no lines between them. */
+  readonly curved?: boolean;
 }
 
 /** All parts in their places as one mesh. Its solids stay separate where the parts are. */

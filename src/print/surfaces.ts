@@ -26,5 +26,5 @@ export function crystalSurfaces({ forms, group }: Crystal, other: string): Surfa
     const symbol = printFace(form.indices, group.axes, { brackets: '{' });
     return { name: letter ? `${letter} ${symbol}` : symbol, colour: FORM_COLOURS[i % FORM_COLOURS.length]! };
   });
-  return [...faces, { name: other, colour: ROD_COLOUR }];
+  return [...faces, { name: other, colour: ROD_COLOUR, curved: true }];
 }

@@ -91,6 +91,10 @@ export interface PrintPlan {
   readonly blunt: BluntPlan | null;
   readonly stand: StandPlan | null;
   readonly pair: boolean;
+  /** Parts are turned onto the face on which they print best. */
+  readonly flat: boolean;
+  /** Findings before printing and handling are wanted. */
+  readonly checks: boolean;
   readonly printer: PrinterProfile;
   readonly files: readonly FileKind[];
   readonly stl: 'binary' | 'text';

@@ -3,7 +3,7 @@ import type { PointGroup } from '../crystal/point-group.ts';
 import { type Zone, zone } from '../crystal/spaces.ts';
 import type { AxesPlan, Size } from './crystal.ts';
 import { type Millimetres, mm, QuantityError, readLength, readVolume } from './quantity.ts';
-import type { AxesInput, SizeInput, ZoneInput } from './schema.ts';
+import type { AxesInput, PrinterProfile, SizeInput, ZoneInput } from './schema.ts';
 
 /** Longest extent of a model whose recipe states no size, millimetres: within the usual hand size of 60 to 80 mm. */
 export const USUAL_SIZE: Size = { kind: 'longest', length: mm(70) };
@@ -78,6 +78,15 @@ export function readAxes(input: AxesInput, group: PointGroup | undefined, usualD
     reach: under('reach', () => bounded(readLength(given.reach ?? USUAL_REACH), 'a reach')),
   };
 }
+
+/** Every axis, as fused rods of the printer's usual thickness. */
+export const allAxes = ({ rod }: PrinterProfile): AxesPlan => ({
+  orders: null,
+  directions: null,
+  fit: 'fused',
+  diameter: mm(rod.diameter),
+  reach: mm(USUAL_REACH),
+});
 
 type AxesObject = Exclude<AxesInput, boolean | string | number | readonly unknown[]>;
 

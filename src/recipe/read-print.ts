@@ -37,8 +37,22 @@ export function readPrint(
   const stand = read<StandInput, StandPlan | null>('stand', print.stand, null, readStand);
   if (!printer || size === undefined || axes === undefined || file === undefined) return undefined;
   if (!body || letters === undefined || blunt === undefined || stand === undefined) return undefined;
-  const { pair = false, files = ['stl'], stl = 'binary' } = print;
-  return { size, axes, body, letters, blunt, stand, pair, printer, files: [...new Set(files)], stl, file };
+  const { pair = false, flat = false, checks = false, files = ['stl'], stl = 'binary' } = print;
+  return {
+    size,
+    axes,
+    body,
+    letters,
+    blunt,
+    stand,
+    pair,
+    flat,
+    checks,
+    printer,
+    files: [...new Set(files)],
+    stl,
+    file,
+  };
 }
 
 function readPrinter(name: string, shelf: Shelf, problems: ProblemList): PrinterProfile | undefined {
@@ -58,7 +72,17 @@ const FALLBACK_PRINTER: PrinterProfile = {
   source: 'start values of presets/printers/fdm-0.4.yaml',
   bed: [220, 220, 250],
   wall: 0.8,
+  usualWall: 1.2,
+  hollowWall: 2,
+  feature: 0.4,
+  overhang: 45,
   rod: { diameter: 3, smallest: 1.8, clearance: 0.2 },
+  freeClearance: 0.4,
+  drains: null,
+  engraved: { stroke: 0.6, depth: 0.6 },
+  raised: { stroke: 0.8, depth: 0.6 },
+  material: { name: 'PLA', density: 1.24, shell: 0.9, infill: 0.15 },
+  speed: { layer: 0.2, perLayer: 4, flow: 8 },
 };
 
 function readFileName(name: string, problems: ProblemList): string | undefined {

@@ -109,6 +109,8 @@ const print = z.strictObject({
   blunt: blunt.optional(),
   stand: stand.optional(),
   pair: z.boolean().optional().describe('two copies: one plain, one with axes and lettered faces'),
+  flat: z.boolean().optional().describe('parts turned onto the face on which they print best'),
+  checks: z.boolean().optional().describe('what to know before printing and handling, measured'),
   printer: z.string().optional().describe('a printer profile'),
   files: z
     .array(z.enum(['stl', '3mf', 'glb']))
@@ -185,16 +187,43 @@ export const setSchema = z.strictObject({
 });
 export type SetPreset = z.infer<typeof setSchema>;
 
+const lettering = z.strictObject({
+  stroke: z.number().describe('thinnest stroke that prints'),
+  depth: z.number().describe('how deep engraved letters go, or how far raised ones stand out'),
+});
+
 /** A printer's file in `presets/printers`. All lengths in millimetres. */
 export const printerSchema = z.strictObject({
   name: z.string(),
   source: citation,
   bed: z.tuple([z.number(), z.number(), z.number()]).describe('largest object: width, depth, height'),
   wall: z.number().describe('thinnest wall that prints'),
+  usualWall: z.number().describe('thinnest wall that is advised'),
+  hollowWall: z.number().describe('wall of hollow bodies'),
+  feature: z.number().describe('thinnest feature, such as an edge or a face, that comes out at all'),
+  overhang: z.number().describe('faces that lean farther than this from the vertical need support, degrees'),
   rod: z.strictObject({
     diameter: z.number().describe('usual rod'),
     smallest: z.number().describe('thinnest rod that prints'),
     clearance: z.number().describe('bore diameter minus rod diameter, for a push fit to be glued'),
+  }),
+  freeClearance: z.number().describe('gap of parts that slide or lift out'),
+  drains: z
+    .strictObject({ diameter: z.number(), count: z.number() })
+    .nullable()
+    .describe('holes through which resin runs out of hollow bodies'),
+  engraved: lettering,
+  raised: lettering,
+  material: z.strictObject({
+    name: z.string(),
+    density: z.number().describe('g/cm³'),
+    shell: z.number().describe('thickness of the solid shell'),
+    infill: z.number().describe('share of the inside that is filled'),
+  }),
+  speed: z.strictObject({
+    layer: z.number().describe('thickness of a layer'),
+    perLayer: z.number().describe('seconds that each layer takes besides laying down material'),
+    flow: z.number().nullable().describe('mm³/s; null where a layer takes the same time whatever is in it'),
   }),
 });
 export type PrinterProfile = z.infer<typeof printerSchema>;

@@ -6,6 +6,7 @@ export type ObjectErrorCode =
   | 'rod-too-wide'
   | 'rods-crowded'
   | 'not-sound'
+  | 'not-together'
   | 'wall'
   | 'drain'
   | 'struts'

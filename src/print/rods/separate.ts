@@ -100,7 +100,7 @@ function halfParts(bench: Workbench, halves: readonly { end: RodEnd; from: numbe
 
 function part(bench: Workbench, name: string, purpose: string, solid: Manifold, ends: readonly AxisEnd[]): Part {
   const [mesh] = ontoBed([bench.mesh(bench.place(solid, UPSIDE_DOWN), 0)]);
-  const surfaces = [{ name, colour: ROD_COLOUR }];
+  const surfaces = [{ name, colour: ROD_COLOUR, curved: true }];
   return {
     name,
     purpose,

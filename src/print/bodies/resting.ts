@@ -1,0 +1,21 @@
+import { printFace } from '../../crystal/indices.ts';
+import { miller } from '../../crystal/spaces.ts';
+import type { ClosedShape } from '../../shape/shape.ts';
+import { unit, type Vector, vectorAt } from './vector.ts';
+
+/** What lies on the bed: a plane number of the solid, or a Cartesian direction that points down. */
+export type Resting = number | Vector;
+
+/** The unit vector that points at the bed; without a wish that of the largest face. */
+export function downwards({ measures }: ClosedShape, resting: Resting | undefined): Vector {
+  if (resting !== undefined && typeof resting !== 'number') return unit(resting);
+  const { area, faces, normals } = measures;
+  const largest = faces.reduce((best, face) => (area[face]! > area[best]! * (1 + 1e-9) ? face : best));
+  return vectorAt(normals, resting ?? largest);
+}
+
+/** A face in brackets, by its plane number. */
+export function faceName({ solid, crystal }: ClosedShape, plane: number): string {
+  const [h, k, l] = vectorAt(solid.planes.normals, plane);
+  return printFace(miller(h, k, l), crystal.group.axes, { brackets: '(' });
+}
