@@ -1,4 +1,4 @@
-import { glbFile, type MadeFile, stlFiles, threeMfFile } from './model-files.ts';
+import { glbFile, type MadeFile, pngFile, stlFiles, threeMfFile } from './model-files.ts';
 import type { ModelFinding } from './print/examined.ts';
 import { extentsOf } from './print/mesh.ts';
 import { assemble, type Part } from './print/part.ts';
@@ -78,6 +78,7 @@ async function makeOne(resolved: Resolved, supplies: ModelSupplies): Promise<Mad
   if (print.files.includes('stl')) files.push(...stlFiles(resolved, parts, stem));
   if (print.files.includes('3mf')) files.push(await threeMfFile(resolved, parts, stem, { application, scale }));
   if (print.files.includes('glb')) files.push(await glbFile(resolved, parts, stem, application));
+  if (print.files.includes('png')) files.push(await pngFile(parts, stem));
   const apart =
     parts.length > 1 && files[0]?.name === `${stem}-${parts[0]!.name}.stl`
       ? ['The parts touch in their places, so there is no STL file of the whole; 3MF and GLB show it.']

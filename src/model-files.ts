@@ -23,7 +23,9 @@ export interface MadeFile {
 }
 
 /** From the object at the viewer, in the crystal's frame: somewhat from the right and above, c upright. */
-const GENERAL_VIEW = [0.91, 0.35, 0.22] as const;
+const GENERAL_VIEW = [0.91, 0.35, 0.3] as const;
+/** Pixels of a side. */
+const PICTURE = 720;
 
 /** Relative difference allowed between the volume of what is read back and that of the part in double precision. */
 const VOLUME_TOLERANCE = 1e-5;
@@ -72,7 +74,6 @@ export async function threeMfFile(
       surfaces: part.surfaces,
     })),
   );
-  const assembled = parts.flatMap(({ placed: meshes, surfaces }) => meshes.map((mesh) => ({ mesh, surfaces })));
   const forms = crystal.forms.map(({ form }) => printFace(form.indices, crystal.group.axes, { brackets: '{' }));
   const bytes = write3mf({
     title: crystal.title,
@@ -86,7 +87,7 @@ export async function threeMfFile(
       RecipeHash: await recipeHash(resolved),
     },
     objects,
-    thumbnail: thumbnailPng(assembled, { toward: GENERAL_VIEW }),
+    thumbnail: thumbnailPng(assembled(parts), { toward: GENERAL_VIEW }),
   });
   const name = `${stem}.3mf`;
   const checks = read3mf(bytes).objects.map(({ mesh, transform }, i) =>
@@ -117,6 +118,16 @@ export async function glbFile(
   const bytes = await writeGlb({ title: crystal.title, application, objects });
   return { name, bytes, holds: 'the finished object for screens', copies: 1, checks };
 }
+
+/** A picture of the finished object. */
+export async function pngFile(parts: readonly Part[], stem: string): Promise<MadeFile> {
+  const { thumbnailPng } = await import('./files/picture/thumbnail.ts');
+  const bytes = thumbnailPng(assembled(parts), { toward: GENERAL_VIEW, size: PICTURE, ground: '#F7F5EF' });
+  return { name: `${stem}.png`, bytes, holds: 'a picture of the finished object', copies: 1, checks: [] };
+}
+
+const assembled = (parts: readonly Part[]) =>
+  parts.flatMap(({ placed: meshes, surfaces }) => meshes.map((mesh) => ({ mesh, surfaces })));
 
 /** Checks what was read back against the part it was written from. @throws ObjectError */
 export function checked(name: string, mesh: Mesh, part: Mesh, normals?: Float32Array): MeshReport {

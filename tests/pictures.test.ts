@@ -1,6 +1,7 @@
 import { readFileSync, writeFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { describe, expect, it } from 'vitest';
+import { type MadeFile, make } from '../src/index.ts';
 import { goniolith } from './cli/run.ts';
 
 /**
@@ -20,6 +21,15 @@ const PICTURES: Readonly<Record<string, readonly string[]>> = {
   'groups.svg': ['32-groups', '--sheet', '--columns', '8'],
 };
 
+/** Pictures of printed objects: mineral and habit, and what its recipe prints. */
+const OBJECTS: Readonly<Record<string, string>> = {
+  'frame.png': 'mineral: fluorite\nhabit: hexoctahedral\nprint: { body: frame, axes: "4", files: [png] }',
+  'letters.png': 'mineral: quartz\nprint: { letters: engraved, axes: all, files: [png] }',
+  'units.png': 'mineral: calcite\nprint: { body: units, files: [png] }',
+  'stand.png': 'mineral: gypsum\nprint: { stand: true, files: [png] }',
+  'blunt.png': 'mineral: pyrite\nhabit: pyritohedron\nprint: { blunt: 2, files: [png] }',
+};
+
 const path = (name: string): string => fileURLToPath(new URL(`../presets/pictures/${name}`, import.meta.url));
 
 describe('the picture', () => {
@@ -28,5 +38,12 @@ describe('the picture', () => {
     expect(code).toBe(0);
     if (process.env.GONIOLITH_RENEW_PICTURES) writeFileSync(path(name), out);
     expect(readFileSync(path(name), 'utf8') === out, `${name} is out of date: npm run pictures`).toBe(true);
+  });
+
+  it.each(Object.entries(OBJECTS))('%s is what the project makes today', async (name, recipe) => {
+    const { files } = await make(recipe);
+    const [{ bytes }] = files as [MadeFile];
+    if (process.env.GONIOLITH_RENEW_PICTURES) writeFileSync(path(name), bytes);
+    expect(readFileSync(path(name)).equals(bytes), `${name} is out of date: npm run pictures`).toBe(true);
   });
 });

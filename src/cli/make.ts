@@ -38,7 +38,7 @@ export function makeCommand(): Command {
     .option('--flat', 'parts lie on the face on which they print best')
     .option('--checks', 'what to know before printing and handling, measured')
     .option('--beds', 'also all parts of this run laid out on printing beds, as 3MF')
-    .option('-f, --files <kinds>', 'stl, 3mf, glb, or several: stl,3mf')
+    .option('-f, --files <kinds>', 'stl, 3mf, glb, png (a picture), or several: stl,3mf')
     .option('--text', 'write STL as text instead of binary')
     .option('-n, --name <name>', 'file name without ending')
     .option('--json', 'print a report for machines')

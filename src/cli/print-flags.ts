@@ -25,7 +25,7 @@ export interface PrintFlags {
 
 const BODIES = ['solid', 'hollow', 'frame', 'halves', 'sectors', 'units'] as const;
 const RELIEFS = ['engraved', 'raised'] as const;
-const FILES = ['stl', '3mf', 'glb'] as const;
+const FILES = ['stl', '3mf', 'glb', 'png'] as const;
 
 /** Flags as the part of a recipe that they stand for. @throws UsageError where they do not go together */
 export function printFlags(flags: PrintFlags): PrintInput {

@@ -80,7 +80,7 @@ export interface StandPlan {
   readonly qr: string | null;
 }
 
-export type FileKind = 'stl' | '3mf' | 'glb';
+export type FileKind = 'stl' | '3mf' | 'glb' | 'png';
 
 export interface PrintPlan {
   /** Null when the recipe states none; `make` then takes `USUAL_SIZE`. */

@@ -113,7 +113,7 @@ const print = z.strictObject({
   checks: z.boolean().optional().describe('what to know before printing and handling, measured'),
   printer: z.string().optional().describe('a printer profile'),
   files: z
-    .array(z.enum(['stl', '3mf', 'glb']))
+    .array(z.enum(['stl', '3mf', 'glb', 'png']))
     .min(1)
     .optional(),
   stl: z.enum(['binary', 'text']).optional(),

@@ -123,7 +123,7 @@ const EXPECTED: Readonly<Record<string, string>> = {
   letters: 'engraved or raised, or { relief: raised, text: indices }',
   blunt: 'a radius such as 0.75, or { bevel: 1 }',
   stand: 'true, or keys such as { text: [Quartz, SiO2], braille: true }',
-  files: 'a list of stl, 3mf, glb',
+  files: 'a list of stl, 3mf, glb, png',
   orders: 'a list of 2, 3, 4, 6 (negative: only rotoinversion axes)',
   directions: 'a list such as ["[001]", "[110]"]',
   fit: 'fused or separate',

@@ -26,8 +26,8 @@ const INK = '#1D2333';
 const FINE = 2;
 /** Share of the picture left free on each side. */
 const MARGIN = 0.05;
-/** Half the width of an edge line as a share of the picture. */
-const LINE = 1 / 320;
+/** Half the width of an edge line in a picture of 256 pixels; in larger ones it grows with the square root. */
+const LINE = 0.8;
 /** Where the light comes from, in the viewer's frame: right, up, toward. */
 const LIGHT = [-0.42, 0.56, 0.71] as const;
 
@@ -62,7 +62,7 @@ export function thumbnailPng(objects: readonly PictureObject[], options: Thumbna
       dot([normals[3 * face]!, normals[3 * face + 1]!, normals[3 * face + 2]!], frame.toward) <= 0;
     for (let k = 0; k < creases.length; k += 2)
       if (!away(sides[k]!) || !away(sides[k + 1]!))
-        raster.line(points, creases[k]!, creases[k + 1]!, LINE * side, line);
+        raster.line(points, creases[k]!, creases[k + 1]!, FINE * LINE * Math.sqrt(size / 256), line);
   });
   return encodePng(raster.reduced(FINE, ground === undefined ? undefined : channels(ground)), size, size);
 }

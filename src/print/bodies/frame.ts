@@ -3,6 +3,7 @@ import type { RodPlan } from '../../rods/plan.ts';
 import { ObjectError } from '../../shape/object-error.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
 import type { Workbench } from '../kit.ts';
+import type { Mesh } from '../mesh.ts';
 import type { Part } from '../part.ts';
 import { ROD_COLOUR } from '../surfaces.ts';
 import { type BodyParts, mm } from './body-parts.ts';
@@ -57,7 +58,9 @@ export function frameBody(
   const rods = plan.rods?.ends.length ? plan.rods : null;
   const skeleton = crystalSkeleton(shape, scale);
   const stays = (bead !== null || rods) && !isHeld(skeleton, rods, plan.strut) ? stayTips(skeleton.corners) : [];
-  const mesh = firstSound(isSound, (layout) => {
+  const down = downwards(shape, plan.resting);
+  const lie = (mesh: Mesh): Mesh => lieOn(mesh, down);
+  const { placed, lying } = firstSound(isSound, lie, (layout) => {
     const solids = [
       ...balls(bench, skeleton.corners, plan.joint, layout),
       ...struts(bench, skeleton, plan, layout),
@@ -74,8 +77,8 @@ export function frameBody(
       { name: 'frame', colour: FRAME_COLOUR },
       { name: 'rods', colour: ROD_COLOUR },
     ],
-    mesh: lieOn(mesh, downwards(shape, plan.resting)),
-    placed: [mesh],
+    mesh: lying,
+    placed: [placed],
   };
   return {
     parts: [part],

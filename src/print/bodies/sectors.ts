@@ -39,14 +39,16 @@ export function growthSectors(
   const surfaces = crystalSurfaces(shape.crystal, 'sector');
   const parts = groups.map((planes): Part => {
     const form = surfaces[shape.solid.planes.form[planes[0]!]!]!;
-    const mesh = sectorMesh(bench, shape, scale, whole, planes, plan.gap, isSound);
+    const lie = (mesh: Mesh): Mesh => lieOn(mesh, vectorAt(shape.measures.normals, planes[0]!));
+    const make = sectorMesh(bench, shape, scale, whole, planes, plan.gap);
+    const { placed, lying } = firstSound(isSound, lie, make);
     const names = planes.map((plane) => faceName(shape, plane));
     return {
       name: `sector-${fileWord(names[0]!)}`,
       purpose: `growth sector of ${names.join(', ')}`,
       surfaces: [form, { name: `sector of ${form.name}`, colour: form.colour }],
-      mesh: lieOn(mesh, vectorAt(shape.measures.normals, planes[0]!)),
-      placed: [mesh],
+      mesh: lying,
+      placed: [placed],
     };
   });
   return {
@@ -69,6 +71,7 @@ function remarksOn(split: readonly number[], names: readonly string[]): string[]
   ];
 }
 
+/** How to make a sector's mesh; the layout moves tools a little where it takes tools. */
 function sectorMesh(
   bench: Workbench,
   shape: ClosedShape,
@@ -76,25 +79,24 @@ function sectorMesh(
   whole: Piece,
   planes: readonly number[],
   gap: number,
-  isSound?: IsSound,
-): Mesh {
-  if (gap === 0) return coneMesh(whole, planes);
+): (layout: number) => Mesh {
+  if (gap === 0) return () => coneMesh(whole, planes);
   const [only] = planes;
   if (planes.length === 1) {
     const piece = cutPiece(shape, scale, sides(shape, only!, -gap / 2), [only!]);
     if (!piece) throw vanished(shape, only!, gap);
-    return pieceMesh(piece, (plane) => (plane === only ? 0 : 1));
+    return () => pieceMesh(piece, (plane) => (plane === only ? 0 : 1));
   }
   const others = whole.faces.filter(({ plane }) => !planes.includes(plane));
   const body = bench.solid(pieceMesh(whole, () => 0));
-  return firstSound(isSound, (layout) => {
+  return (layout) => {
     const tools = others.map(({ plane }, i) =>
       bench.solid(pieceMesh(grownSector(shape, scale, plane, gap * growth(i + layout / LAYOUTS)), () => 1)),
     );
     const sector = bench.subtract(body, tools);
     if (sector.isEmpty()) throw vanished(shape, only!, gap);
     return bench.mesh(sector, 1);
-  });
+  };
 }
 
 /** The pyramids over some faces, their walls between each other left out. */

@@ -4,6 +4,7 @@ import type { AxisEnd } from '../../rods/axis-ends.ts';
 import { axisWords } from '../../rods/axis-words.ts';
 import { COLLAR, GAP, type RodEnd, type RodPlan } from '../../rods/plan.ts';
 import { ObjectError } from '../../shape/object-error.ts';
+import { angleBetween, clearDepth } from '../bores/clear-depth.ts';
 import type { Workbench } from '../kit.ts';
 import { ontoBed, type Part } from '../part.ts';
 import { ROD_COLOUR } from '../surfaces.ts';
@@ -41,9 +42,13 @@ export function boreForRods(bench: Workbench, body: Manifold, plan: RodPlan, cle
 
 /** Where a blind bore ends: so far from the centre that a wall stays between it and every other bore. */
 function blindDepth(end: RodEnd, plan: RodPlan, clearance: number): number {
-  const half = (plan.diameter + clearance + WALL) / 2;
+  const radius = Math.hypot(...boreOutline(plan.diameter, clearance)[0]!);
   const others = plan.ends.flat().filter(({ line }) => line !== end.line);
-  const depth = Math.max(...others.map((other) => half / Math.tan(angle(end.end, other.end) / 2)));
+  const neighbours = others.map(({ end: { along }, line }) => ({
+    angle: angleBetween(end.end.along, along),
+    through: line === plan.ends[0]![0].line,
+  }));
+  const depth = clearDepth(neighbours, radius, WALL);
   if (end.exit - depth >= 2 * plan.diameter) return depth;
   throw new ObjectError(
     'rods-crowded',
@@ -114,10 +119,6 @@ function part(bench: Workbench, name: string, purpose: string, solid: Manifold, 
 const UPSIDE_DOWN: Mat4 = [1, 0, 0, 0, 0, -1, 0, 0, 0, 0, -1, 0, 0, 0, 0, 1];
 
 const fileWord = (symbol: string): string => symbol.replace('-', 'bar').replace('/', '_');
-
-function angle({ along: a }: AxisEnd, { along: b }: AxisEnd): number {
-  return Math.acos(Math.min(1, Math.max(-1, a[0] * b[0] + a[1] * b[1] + a[2] * b[2])));
-}
 
 function tell([near]: readonly [RodEnd, RodEnd], split: readonly (readonly [RodEnd, RodEnd])[]): string[] {
   const named = (words: string, { line }: RodEnd): string =>
