@@ -1,4 +1,4 @@
-import { glbFile, type MadeFile, pngFile, stlFiles, threeMfFile } from './model-files.ts';
+import { glbFile, isSound, type MadeFile, pngFile, stlFiles, threeMfFile } from './model-files.ts';
 import type { ModelFinding } from './print/examined.ts';
 import { extentsOf } from './print/mesh.ts';
 import { assemble, type Part } from './print/part.ts';
@@ -26,7 +26,7 @@ export interface Made {
   readonly findings: readonly ModelFinding[];
 }
 
-export interface ModelSupplies extends Supplies {
+export interface ModelSupplies extends Omit<Supplies, 'isSound'> {
   /** Program and version, as files that have a place for it state it. */
   readonly application: string;
 }
@@ -67,7 +67,7 @@ async function makeOne(resolved: Resolved, supplies: ModelSupplies): Promise<Mad
   const shape = closedOrThrow(polyhedron(resolved.crystal));
   const { print } = resolved;
   const scale = millimetresPerUnit(shape, print.size ?? USUAL_SIZE);
-  const printed = await printedParts(shape, scale, print, supplies);
+  const printed = await printedParts(shape, scale, print, { ...supplies, isSound });
   const { remarks, warnings } = printed;
   const examining = print.flat || print.checks ? await import('./print/examined.ts') : null;
   const parts = print.flat && examining ? await examining.laidFlat(printed.parts, print) : printed.parts;

@@ -51,7 +51,10 @@ export function stlFiles({ crystal, print }: Resolved, parts: readonly Part[], s
   return partsTouch(whole) ? each : [write(`${stem}.stl`, 'all parts in their places', 1, whole), ...each];
 }
 
-const partsTouch = (whole: Mesh): boolean => !checkMesh(weldFloat32(whole)).ok;
+const partsTouch = (whole: Mesh): boolean => !isSound(whole);
+
+/** Whether a mesh passes the check once it is in single precision. */
+export const isSound = (mesh: Mesh): boolean => checkMesh(weldFloat32(mesh)).ok;
 
 /** 3MF: every body to print as an object of its own, side by side, with colours and a picture. @throws ObjectError */
 export async function threeMfFile(

@@ -12,6 +12,7 @@ import { hollowBody } from './bodies/hollow.ts';
 import { growthSectors } from './bodies/sectors.ts';
 import { asymmetricUnits } from './bodies/units.ts';
 import type { Workbench } from './kit.ts';
+import type { Mesh } from './mesh.ts';
 
 /** Pins that hold pieces together: thickness and length in millimetres, and plastic left around their holes. */
 const PIN = { diameter: 4, length: 12 };
@@ -19,6 +20,11 @@ const PIN = { diameter: 4, length: 12 };
 const JOINT = 1.5;
 /** Bought disc magnets: a common size (common practice). */
 const MAGNET = { diameter: 6, thickness: 2 };
+/** Of a magnet in its pocket, across and in depth: design guides give 0.2 to 0.3 mm. */
+const MAGNET_CLEARANCE = 0.3;
+
+/** Whether a mesh survives single precision; rooms below cannot ask the files' check themselves. */
+export type IsSound = (mesh: Mesh) => boolean;
 
 /** Bodies other than solid ones. @throws ObjectError */
 export function bodyParts(
@@ -27,6 +33,7 @@ export function bodyParts(
   scale: number,
   { body, printer }: PrintPlan & { readonly body: Exclude<BodyPlan, { kind: 'solid' }> },
   rods: RodPlan | null,
+  isSound: IsSound,
 ): BodyParts {
   switch (body.kind) {
     case 'hollow': {
@@ -36,20 +43,20 @@ export function bodyParts(
     case 'frame': {
       const strut = body.strut ?? printer.rod.diameter;
       const bead = body.bead ? 3 * strut : null;
-      return frameBody(bench, shape, scale, { strut, joint: JOINT * strut, bead, rods });
+      return frameBody(bench, shape, scale, { strut, joint: JOINT * strut, bead, rods }, isSound);
     }
     case 'halves':
       return halves(bench, shape, scale, {
         plane: { normal: cutNormal(shape, body.plane), offset: 0 },
         dowel: body.join === 'dowels' ? { ...PIN, clearance: printer.rod.clearance, count: 2 } : null,
-        magnets: body.join === 'magnets' ? { ...MAGNET, clearance: printer.freeClearance / 2 } : null,
+        magnets: body.join === 'magnets' ? { ...MAGNET, clearance: MAGNET_CLEARANCE } : null,
         wall: printer.usualWall,
       });
     case 'sectors':
-      return growthSectors(bench, shape, scale, body);
+      return growthSectors(bench, shape, scale, { by: body.by, gap: body.gap ?? printer.freeClearance }, isSound);
     case 'units': {
       const pins = { ...PIN, clearance: printer.rod.clearance, wall: printer.usualWall };
-      return asymmetricUnits(bench, shape, scale, { gap: body.gap, pins });
+      return asymmetricUnits(bench, shape, scale, { gap: body.gap ?? printer.freeClearance, pins });
     }
   }
 }

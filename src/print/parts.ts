@@ -29,6 +29,8 @@ export interface PrintedModel {
 export interface Supplies {
   /** Bytes of the typeface for letters, in WOFF, TrueType or OpenType; asked for when letters are. */
   readonly typeface: () => Promise<Uint8Array>;
+  /** Whether a mesh survives being written. */
+  readonly isSound: (mesh: Mesh) => boolean;
 }
 
 /** Makes the printable parts of a crystal at its size. @throws ObjectError */
@@ -47,7 +49,10 @@ export async function printedParts(
     const base =
       body.kind === 'solid'
         ? solidParts(bench, shape, scale, print, rods, tools)
-        : { blunted: null, ...tools.bodies!.bodyParts(bench, shape, scale, { ...print, body }, rods) };
+        : {
+            blunted: null,
+            ...tools.bodies!.bodyParts(bench, shape, scale, { ...print, body }, rods, supplies.isSound),
+          };
     if (!print.stand) return base;
     const stand = tools.stands!.standing(bench, shape, scale, print.stand, {
       printer,

@@ -5,8 +5,6 @@ import { bounded } from './print-plan.ts';
 import { type Millimetres, mm, readLength } from './quantity.ts';
 import type { BluntInput, BodyInput, FaceInput, LettersInput, StandInput } from './schema.ts';
 
-/** Width of the gap that lets pieces of a crystal part from each other, millimetres (see the printer profiles). */
-const USUAL_GAP = mm(0.2);
 /** Rounding when blunting is asked for without a figure: ideal corners then reach at most 0.20 mm into the gauge. */
 const USUAL_RADIUS = mm(0.75);
 
@@ -33,14 +31,18 @@ export function readBody(input: BodyInput, group: PointGroup | undefined): BodyP
     }
     case 'sectors': {
       const { by = 'face', gap } = 'by' in given || 'gap' in given ? given : {};
-      return { kind: 'sectors', by, gap: lengthOr(gap, USUAL_GAP) };
+      return { kind: 'sectors', by, gap: gapOf(gap) };
     }
     case 'units': {
       const { gap } = 'gap' in given ? given : {};
-      return { kind: 'units', gap: lengthOr(gap, USUAL_GAP) };
+      return { kind: 'units', gap: gapOf(gap) };
     }
   }
 }
+
+/** A gap may be nothing: pieces then fill the crystal exactly. */
+const gapOf = (value: number | string | undefined): Millimetres | null =>
+  value !== undefined && readLength(value) === 0 ? mm(0) : lengthOr(value, null);
 
 const faceOf = (input: FaceInput, group: PointGroup | undefined) =>
   parseFace(Array.isArray(input) ? input : String(input), readOptions(group?.axes ?? 'hexagonal'));

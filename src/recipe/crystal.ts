@@ -55,14 +55,14 @@ export interface AxesPlan {
   readonly reach: Millimetres;
 }
 
-/** What the crystal's body is to be. */
+/** What the crystal's body is to be; null leaves a figure to the printer's profile. */
 export type BodyPlan =
   | { readonly kind: 'solid' }
   | { readonly kind: 'hollow'; readonly wall: Millimetres | null; readonly drains: boolean | null }
   | { readonly kind: 'frame'; readonly strut: Millimetres | null; readonly bead: boolean }
   | { readonly kind: 'halves'; readonly plane: Miller | null; readonly join: 'dowels' | 'magnets' | 'none' }
-  | { readonly kind: 'sectors'; readonly by: 'face' | 'form'; readonly gap: Millimetres }
-  | { readonly kind: 'units'; readonly gap: Millimetres };
+  | { readonly kind: 'sectors'; readonly by: 'face' | 'form'; readonly gap: Millimetres | null }
+  | { readonly kind: 'units'; readonly gap: Millimetres | null };
 
 export interface LettersPlan {
   readonly relief: 'engraved' | 'raised';
