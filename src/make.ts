@@ -2,7 +2,8 @@ import { glbFile, isSound, type MadeFile, pngFile, stlFiles, threeMfFile } from 
 import type { ModelFinding } from './print/examined.ts';
 import { extentsOf } from './print/mesh.ts';
 import { assemble, type Part } from './print/part.ts';
-import { printedParts, type Supplies } from './print/parts.ts';
+import { printedParts } from './print/parts.ts';
+import type { Supplies } from './print/tools.ts';
 import type { Resolved } from './recipe/crystal.ts';
 import { allAxes, LARGEST_SIZE, USUAL_SIZE } from './recipe/print-plan.ts';
 import type { PrinterProfile } from './recipe/schema.ts';
@@ -44,7 +45,7 @@ export async function makeModel(resolved: Resolved, supplies: ModelSupplies): Pr
 async function makePair(resolved: Resolved, supplies: ModelSupplies): Promise<Made> {
   const { print } = resolved;
   const stem = fileStem(resolved);
-  const plain = { ...print, axes: null, letters: null, stand: null, file: `${stem}-plain` };
+  const plain = { ...print, axes: null, letters: null, stand: null, planes: null, key: false, file: `${stem}-plain` };
   const marked = {
     ...print,
     axes: print.axes ?? allAxes(print.printer),

@@ -6,7 +6,7 @@ import { readStl } from './files/stl/read.ts';
 import { writeStl } from './files/stl/write.ts';
 import { writeStlText } from './files/stl/write-text.ts';
 import { type Mesh, meshVolume } from './print/mesh.ts';
-import { assemble, ontoBed, type Part } from './print/part.ts';
+import { assemble, jobs, ontoBed, type Part } from './print/part.ts';
 import type { Resolved } from './recipe/crystal.ts';
 import { ObjectError } from './shape/object-error.ts';
 
@@ -69,12 +69,13 @@ export async function threeMfFile(
     import('./files/picture/thumbnail.ts'),
   ]);
   const { crystal } = resolved;
-  const objects = parts.flatMap((part) =>
+  const objects = inJobs(parts).flatMap(({ part, within }) =>
     part.placed.map((_, copy) => ({
       name: `${crystal.title}: ${part.name}${part.placed.length > 1 ? ` ${copy + 1} of ${part.placed.length}` : ''}`,
       partNumber: `${stem}-${part.name}`,
       mesh: part.mesh,
       surfaces: part.surfaces,
+      ...(within !== undefined && { within }),
     })),
   );
   const forms = crystal.forms.map(({ form }) => printFace(form.indices, crystal.group.axes, { brackets: '{' }));
@@ -103,6 +104,16 @@ export async function threeMfFile(
     copies: 1,
     checks,
   };
+}
+
+/** Parts of one job behind each other, with the number that the object of each job's first part has. */
+function inJobs(parts: readonly Part[]): { part: Part; within?: number }[] {
+  let objects = 0;
+  return jobs(parts).flatMap(([leader, ...others]) => {
+    const within = objects;
+    objects += leader!.placed.length + others.length;
+    return [{ part: leader! }, ...others.map((part) => ({ part, within }))];
+  });
 }
 
 /** GLB for screens and phones: the finished object in colour. @throws ObjectError */

@@ -1,5 +1,5 @@
 import { choiceOf } from '../recipe/print-plan.ts';
-import type { RecipeInput } from '../recipe/schema.ts';
+import { BODY_KINDS, RELIEFS, type RecipeInput } from '../recipe/schema.ts';
 import { oneOf, UsageError } from './failure.ts';
 
 type PrintInput = NonNullable<RecipeInput['print']>;
@@ -17,14 +17,16 @@ export interface PrintFlags {
   letters?: string | true;
   blunt?: string | true;
   stand?: true;
+  base?: string;
+  planes?: string | true;
+  key?: true;
   pair?: true;
   flat?: true;
   checks?: true;
   files?: string;
 }
 
-const BODIES = ['solid', 'hollow', 'frame', 'halves', 'sectors', 'units'] as const;
-const RELIEFS = ['engraved', 'raised'] as const;
+const FITS = ['fused', 'separate', 'press', 'slide'] as const;
 const FILES = ['stl', '3mf', 'glb', 'png'] as const;
 
 /** Flags as the part of a recipe that they stand for. @throws UsageError where they do not go together */
@@ -36,12 +38,17 @@ export function printFlags(flags: PrintFlags): PrintInput {
     ...(flags.size !== undefined && { size: flags.size }),
     ...(axes !== undefined && { axes }),
     ...(flags.printer !== undefined && { printer: flags.printer }),
-    ...(flags.body !== undefined && { body: oneOf('--body', flags.body, BODIES) }),
+    ...(flags.body !== undefined && { body: oneOf('--body', flags.body, BODY_KINDS) }),
     ...(flags.letters !== undefined && {
       letters: flags.letters === true || oneOf('--letters', flags.letters, RELIEFS),
     }),
     ...(flags.blunt !== undefined && { blunt: flags.blunt }),
     ...(flags.stand && { stand: true }),
+    ...(flags.base !== undefined && { base: flags.base.split('|').map((line) => line.trim()) }),
+    ...(flags.planes !== undefined && {
+      planes: flags.planes === true || oneOf('--planes', flags.planes, RELIEFS),
+    }),
+    ...(flags.key && { key: true }),
     ...(flags.pair && { pair: true }),
     ...(flags.flat && { flat: true }),
     ...(flags.checks && { checks: true }),
@@ -58,9 +65,7 @@ function axesFrom({ axes, rods, rodDiameter, reach }: PrintFlags): PrintInput['a
     ...(rodDiameter !== undefined && { diameter: rodDiameter }),
     ...(reach !== undefined && { reach }),
   };
-  if (rods !== undefined && rods !== 'fused' && rods !== 'separate')
-    throw new UsageError(`--rods is fused or separate, not "${rods}".`);
-  const more = { ...details, ...(rods !== undefined && { fit: rods as 'fused' | 'separate' }) };
+  const more = { ...details, ...(rods !== undefined && { fit: oneOf('--rods', rods, FITS) }) };
   if (axes === undefined) {
     if (Object.keys(more).length > 0) throw new UsageError('--rods, --rod-diameter and --reach go with --axes.');
     return undefined;

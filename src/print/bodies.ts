@@ -13,6 +13,7 @@ import { growthSectors } from './bodies/sectors.ts';
 import { asymmetricUnits } from './bodies/units.ts';
 import type { Workbench } from './kit.ts';
 import type { Mesh } from './mesh.ts';
+import { colouredSkins } from './skins/skins.ts';
 
 /** Pins that hold pieces together: thickness and length in millimetres, and plastic left around their holes. */
 const PIN = { diameter: 4, length: 12 };
@@ -54,6 +55,10 @@ export function bodyParts(
       });
     case 'sectors':
       return growthSectors(bench, shape, scale, { by: body.by, gap: body.gap ?? printer.freeClearance }, isSound);
+    case 'skins': {
+      const { parts, remarks } = colouredSkins(shape, scale, { depth: body.depth ?? printer.usualWall });
+      return { parts, remarks, warnings: [] };
+    }
     case 'units': {
       const pins = { ...PIN, clearance: printer.rod.clearance, wall: printer.usualWall };
       return asymmetricUnits(bench, shape, scale, { gap: body.gap ?? printer.freeClearance, pins });

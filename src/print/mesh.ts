@@ -33,3 +33,9 @@ export function extentsOf({ positions }: Mesh): [number, number, number] {
   };
   return [extent(0), extent(1), extent(2)];
 }
+
+/** A mesh shifted. */
+export const moved = (mesh: Mesh, by: readonly number[]): Mesh => ({
+  ...mesh,
+  positions: mesh.positions.map((value, i) => value + by[i % 3]!),
+});

@@ -1,4 +1,4 @@
-import type { Mesh } from './mesh.ts';
+import { type Mesh, moved } from './mesh.ts';
 
 /** A thing to print. */
 export interface Part {
@@ -10,6 +10,8 @@ export interface Part {
   readonly surfaces: readonly Surface[];
   /** As it lies on the bed. */
   readonly mesh: Mesh;
+  /** Name of the part with which it is printed in one job, in a colour of its own; its mesh keeps its place there. */
+  readonly with?: string;
   /** Where each copy sits in the finished object; one mesh a copy. */
   readonly placed: readonly Mesh[];
 }
@@ -21,11 +23,26 @@ export interface Surface {
   readonly colour: string;
   /** Facets that stand for something round: pictures draw no lines between them. */
   readonly curved?: boolean;
+  /** Strokes and lines: what is thin between them is no wall. */
+  readonly fine?: boolean;
+}
+
+/** Parts that are printed in one job, the one that the others belong to first. */
+export function jobs<T extends Pick<Part, 'name' | 'with'>>(parts: readonly T[]): T[][] {
+  const found: T[][] = [];
+  for (const part of parts) {
+    const own = part.with === undefined ? undefined : found.findLast(([leader]) => leader!.name === part.with);
+    if (own) own.push(part);
+    else found.push([part]);
+  }
+  return found;
 }
 
 /** All parts in their places as one mesh. Its solids stay separate where the parts are. */
-export function assemble(parts: readonly Part[]): Mesh {
-  const meshes = parts.flatMap(({ placed }) => placed);
+export const assemble = (parts: readonly Part[]): Mesh => together(parts.flatMap(({ placed }) => placed));
+
+/** Meshes as one, without their surfaces unless it is one only. */
+export function together(meshes: readonly Mesh[]): Mesh {
   const [only, ...others] = meshes;
   if (only && others.length === 0) return only;
   const positions = new Float64Array(meshes.reduce((sum, mesh) => sum + mesh.positions.length, 0));
@@ -45,12 +62,16 @@ export function assemble(parts: readonly Part[]): Mesh {
 
 /** Moves meshes together so that their common box starts at the origin: the corner of a printer's bed. */
 export function ontoBed(meshes: readonly Mesh[]): Mesh[] {
-  const low = [0, 1, 2].map((axis) =>
+  const low = lowCorner(...meshes);
+  return meshes.map((mesh) => moved(mesh, [-low[0]!, -low[1]!, -low[2]!]));
+}
+
+/** The least of each coordinate. */
+export const lowCorner = (...meshes: readonly Mesh[]): number[] =>
+  [0, 1, 2].map((axis) =>
     meshes.reduce((least, { positions }) => {
       let own = least;
       for (let at = axis; at < positions.length; at += 3) own = Math.min(own, positions[at]!);
       return own;
     }, Number.POSITIVE_INFINITY),
   );
-  return meshes.map((mesh) => ({ ...mesh, positions: mesh.positions.map((value, i) => value - low[i % 3]!) }));
-}

@@ -1,3 +1,4 @@
+import { normal as faceNormal } from '../crystal/cell.ts';
 import type { PrintPlan, StandPlan } from '../recipe/crystal.ts';
 import { AXIS_SYMBOLS } from '../rods/axis-symbol.ts';
 import type { RodEnd, RodPlan } from '../rods/plan.ts';
@@ -22,14 +23,14 @@ export function standing(
 ): Stand {
   const lines = plan.text ?? labelLines(shape.crystal);
   return makeStand(bench, shape, scale, {
-    attitude: 'c-up',
+    attitude: plan.down ? { down: faceNormal(shape.crystal.metric, plan.down) } : 'c-up',
     typeface,
     clearance: printer.freeClearance,
     wall: printer.usualWall,
     lines,
     ...(plan.braille && { braille: plan.text ? plan.text.slice(0, 2) : brailleLines(shape.crystal) }),
     ...(plan.qr !== null && { code: plan.qr }),
-    contrast: true,
+    contrast: plan.contrast,
     ...(rods && { rods: rods.ends.flat().flatMap((end) => rodLines(end, rods)) }),
   });
 }

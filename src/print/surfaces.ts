@@ -19,6 +19,8 @@ const FORM_COLOURS = [
   '#CBD5AB',
 ];
 export const ROD_COLOUR = '#33384A';
+/** Okabe and Ito's vermilion (Color Universal Design, 2008), unmixed: it must stand out from every form's colour. */
+export const SECOND_COLOUR = '#D55E00';
 
 /** One surface a form, in the recipe's order, and after them one for everything that is no crystal face. */
 export function crystalSurfaces({ forms, group }: Crystal, other: string): Surface[] {

@@ -1,9 +1,9 @@
 import { parseFace, readOptions } from '../crystal/indices.ts';
 import type { PointGroup } from '../crystal/point-group.ts';
-import type { BluntPlan, BodyPlan, LettersPlan, StandPlan } from './crystal.ts';
+import type { BluntPlan, BodyPlan, LettersPlan, PlanesPlan, StandPlan } from './crystal.ts';
 import { bounded } from './print-plan.ts';
 import { type Millimetres, mm, readLength } from './quantity.ts';
-import type { BluntInput, BodyInput, FaceInput, LettersInput, StandInput } from './schema.ts';
+import type { BaseInput, BluntInput, BodyInput, FaceInput, LettersInput, PlanesInput, StandInput } from './schema.ts';
 
 /** Rounding when blunting is asked for without a figure: ideal corners then reach at most 0.20 mm into the gauge. */
 const USUAL_RADIUS = mm(0.75);
@@ -32,6 +32,10 @@ export function readBody(input: BodyInput, group: PointGroup | undefined): BodyP
     case 'sectors': {
       const { by = 'face', gap } = 'by' in given || 'gap' in given ? given : {};
       return { kind: 'sectors', by, gap: gapOf(gap) };
+    }
+    case 'skins': {
+      const { depth } = 'depth' in given ? given : {};
+      return { kind: 'skins', depth: lengthOr(depth, null) };
     }
     case 'units': {
       const { gap } = 'gap' in given ? given : {};
@@ -62,8 +66,22 @@ export function readBlunt(input: BluntInput): BluntPlan | null {
   return { kind: 'round', radius: lengthOr(input.radius, USUAL_RADIUS) };
 }
 
-export function readStand(input: StandInput): StandPlan | null {
+/** @throws CrystalError */
+export function readStand(input: StandInput, group: PointGroup | undefined): StandPlan | null {
   if (input === false) return null;
-  const { text = null, braille = true, qr = null } = typeof input === 'object' ? input : {};
-  return { text, braille, qr };
+  const { text = null, braille = true, qr = null, down, contrast = false } = typeof input === 'object' ? input : {};
+  return { text, braille, qr, down: down === undefined ? null : faceOf(down, group), contrast };
+}
+
+export const readBase = (input: BaseInput): readonly string[] => (typeof input === 'string' ? [input] : input);
+
+/** @throws QuantityError */
+export function readPlanes(input: PlanesInput): PlanesPlan | null {
+  if (input === false) return null;
+  const { relief = 'engraved', width, depth } = typeof input === 'object' ? input : {};
+  return {
+    relief: typeof input === 'string' ? input : relief,
+    width: lengthOr(width, null),
+    depth: lengthOr(depth, null),
+  };
 }

@@ -49,10 +49,13 @@ export type Size =
 export interface AxesPlan {
   readonly orders: readonly number[] | null;
   readonly directions: readonly Zone[] | null;
-  readonly fit: 'fused' | 'separate';
+  /** Printed rods, fused or pushed in; or bores for bought metal rod, pressed or sliding. */
+  readonly fit: 'fused' | 'separate' | 'press' | 'slide';
   readonly diameter: Millimetres;
   /** How far a rod stands out of the crystal, its terminal included. */
   readonly reach: Millimetres;
+  /** Of bores for metal rod, from the surface; without it the first axis right through, the others as deep as can be. */
+  readonly depth?: Millimetres;
 }
 
 /** What the crystal's body is to be; null leaves a figure to the printer's profile. */
@@ -62,10 +65,14 @@ export type BodyPlan =
   | { readonly kind: 'frame'; readonly strut: Millimetres | null; readonly bead: boolean }
   | { readonly kind: 'halves'; readonly plane: Miller | null; readonly join: 'dowels' | 'magnets' | 'none' }
   | { readonly kind: 'sectors'; readonly by: 'face' | 'form'; readonly gap: Millimetres | null }
-  | { readonly kind: 'units'; readonly gap: Millimetres | null };
+  | { readonly kind: 'units'; readonly gap: Millimetres | null }
+  | { readonly kind: 'skins'; readonly depth: Millimetres | null };
+
+/** How something stands on a face: sunk, proud, or sunk and filled with a second colour. */
+export type ReliefPlan = 'engraved' | 'raised' | 'inlaid';
 
 export interface LettersPlan {
-  readonly relief: 'engraved' | 'raised';
+  readonly relief: ReliefPlan;
   readonly text: 'letters' | 'indices';
 }
 
@@ -78,6 +85,17 @@ export interface StandPlan {
   readonly text: readonly string[] | null;
   readonly braille: boolean;
   readonly qr: string | null;
+  /** The face on which the crystal rests; null: c stands upright. */
+  readonly down: Miller | null;
+  /** Letters and code are parts of their own. */
+  readonly contrast: boolean;
+}
+
+/** Mirror planes as lines on the surface; null leaves a figure to the printer's profile. */
+export interface PlanesPlan {
+  readonly relief: ReliefPlan;
+  readonly width: Millimetres | null;
+  readonly depth: Millimetres | null;
 }
 
 export type FileKind = 'stl' | '3mf' | 'glb' | 'png';
@@ -90,6 +108,11 @@ export interface PrintPlan {
   readonly letters: LettersPlan | null;
   readonly blunt: BluntPlan | null;
   readonly stand: StandPlan | null;
+  /** Lines under the resting face. */
+  readonly base: readonly string[] | null;
+  readonly planes: PlanesPlan | null;
+  /** A printed key of the axis symbols is wanted. */
+  readonly key: boolean;
   readonly pair: boolean;
   /** Parts are turned onto the face on which they print best. */
   readonly flat: boolean;

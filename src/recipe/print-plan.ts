@@ -63,6 +63,7 @@ export function bounded(length: Millimetres, what = 'a size'): Millimetres {
 export function readAxes(input: AxesInput, group: PointGroup | undefined, usualDiameter: number): AxesPlan | null {
   if (input === false) return null;
   const given: AxesObject = typeof input === 'object' && !Array.isArray(input) ? input : choiceOf(input);
+  const { depth } = given;
   const unknown = given.orders?.find((order) => ![2, 3, 4, 6, -3, -4, -6].includes(order));
   if (unknown !== undefined)
     throw new QuantityError(
@@ -76,6 +77,7 @@ export function readAxes(input: AxesInput, group: PointGroup | undefined, usualD
     fit: given.fit ?? 'fused',
     diameter: under('diameter', () => bounded(readLength(given.diameter ?? usualDiameter), 'a diameter')),
     reach: under('reach', () => bounded(readLength(given.reach ?? USUAL_REACH), 'a reach')),
+    ...(depth !== undefined && { depth: under('depth', () => bounded(readLength(depth), 'a depth')) }),
   };
 }
 

@@ -1,10 +1,19 @@
 import { nearest } from '../crystal/nearest.ts';
 import type { PointGroup } from '../crystal/point-group.ts';
-import { readBlunt, readBody, readLetters, readStand } from './body-plan.ts';
-import type { BluntPlan, BodyPlan, LettersPlan, PrintPlan, StandPlan } from './crystal.ts';
+import { readBase, readBlunt, readBody, readLetters, readPlanes, readStand } from './body-plan.ts';
+import type { BluntPlan, BodyPlan, LettersPlan, PlanesPlan, PrintPlan, StandPlan } from './crystal.ts';
 import { readAxes, readSize } from './print-plan.ts';
 import type { ProblemList } from './problem-list.ts';
-import type { BluntInput, BodyInput, LettersInput, PrinterProfile, RecipeInput, StandInput } from './schema.ts';
+import type {
+  BaseInput,
+  BluntInput,
+  BodyInput,
+  LettersInput,
+  PlanesInput,
+  PrinterProfile,
+  RecipeInput,
+  StandInput,
+} from './schema.ts';
 import { either, preset, type Shelf } from './shelf.ts';
 
 const USUAL_PRINTER = 'fdm-0.4';
@@ -34,10 +43,13 @@ export function readPrint(
   const body = read<BodyInput, BodyPlan>('body', print.body, { kind: 'solid' }, (input) => readBody(input, group));
   const letters = read<LettersInput, LettersPlan | null>('letters', print.letters, null, readLetters);
   const blunt = read<BluntInput, BluntPlan | null>('blunt', print.blunt, null, readBlunt);
-  const stand = read<StandInput, StandPlan | null>('stand', print.stand, null, readStand);
+  const stand = read<StandInput, StandPlan | null>('stand', print.stand, null, (input) => readStand(input, group));
+  const base = read<BaseInput, readonly string[] | null>('base', print.base, null, readBase);
+  const planes = read<PlanesInput, PlanesPlan | null>('planes', print.planes, null, readPlanes);
   if (!printer || size === undefined || axes === undefined || file === undefined) return undefined;
   if (!body || letters === undefined || blunt === undefined || stand === undefined) return undefined;
-  const { pair = false, flat = false, checks = false, files = ['stl'], stl = 'binary' } = print;
+  if (base === undefined || planes === undefined) return undefined;
+  const { key = false, pair = false, flat = false, checks = false, files = ['stl'], stl = 'binary' } = print;
   return {
     size,
     axes,
@@ -45,6 +57,9 @@ export function readPrint(
     letters,
     blunt,
     stand,
+    base,
+    planes,
+    key,
     pair,
     flat,
     checks,
@@ -76,7 +91,7 @@ const FALLBACK_PRINTER: PrinterProfile = {
   hollowWall: 2,
   feature: 0.4,
   overhang: 45,
-  rod: { diameter: 3, smallest: 1.8, clearance: 0.2 },
+  rod: { diameter: 3, smallest: 1.8, clearance: 0.2, press: 0.1, slide: 0.3 },
   freeClearance: 0.4,
   drains: null,
   engraved: { stroke: 0.6, depth: 0.6 },

@@ -49,9 +49,13 @@ const size = z
 const chosenAxes = z.strictObject({
   orders: z.array(z.number()).optional().describe('2, 3, 4, 6; negative: only rotoinversion axes'),
   directions: z.array(zoneText).optional(),
-  fit: z.enum(['fused', 'separate']).optional(),
+  fit: z
+    .enum(['fused', 'separate', 'press', 'slide'])
+    .optional()
+    .describe('rods fused to the crystal; separate rods to push in; bores for bought metal rod to press or slide in'),
   diameter: lengthText.optional(),
   reach: lengthText.optional().describe('how far a rod stands out of the crystal'),
+  depth: lengthText.optional().describe('of bores for metal rod from the surface; as deep as can be by default'),
 });
 const axes = z
   .union([z.boolean(), z.string(), z.number(), z.array(z.number()), chosenAxes])
@@ -69,18 +73,22 @@ const halves = z.strictObject({
 });
 const sectors = z.strictObject({ kind: z.literal('sectors'), by: z.enum(['face', 'form']).optional(), gap: length });
 const units = z.strictObject({ kind: z.literal('units'), gap: length });
-const bodies = [hollow, frame, halves, sectors, units] as const;
-const BODY_KINDS = ['solid', 'hollow', 'frame', 'halves', 'sectors', 'units'] as const;
+const skins = z.strictObject({ kind: z.literal('skins'), depth: length });
+const bodies = [hollow, frame, halves, sectors, units, skins] as const;
+export const BODY_KINDS = ['solid', 'hollow', 'frame', 'halves', 'sectors', 'units', 'skins'] as const;
 const body = z
   .union([z.enum(BODY_KINDS), ...bodies])
-  .describe('solid; hollow; a frame of its edges; two halves; growth sectors; asymmetric units');
+  .describe(
+    'solid; hollow; a frame of its edges; two halves; growth sectors; asymmetric units; a core with a skin in each form’s colour',
+  );
 
+export const RELIEFS = ['engraved', 'raised', 'inlaid'] as const;
 const letters = z
   .union([
     z.boolean(),
-    z.enum(['engraved', 'raised']),
+    z.enum(RELIEFS),
     z.strictObject({
-      relief: z.enum(['engraved', 'raised']).optional(),
+      relief: z.enum(RELIEFS).optional(),
       text: z.enum(['letters', 'indices']).optional(),
     }),
   ])
@@ -97,9 +105,23 @@ const stand = z
       text: z.array(z.string()).optional(),
       braille: z.boolean().optional(),
       qr: z.string().optional(),
+      down: faceText.optional().describe('the face on which the crystal rests; without it c stands upright'),
+      contrast: z.boolean().optional().describe('letters and code as parts of their own, for a second colour'),
     }),
   ])
   .describe('a stand that holds the crystal, with a label');
+
+const base = z
+  .union([z.string(), z.array(z.string())])
+  .describe('lines engraved under the resting face, such as an accession number');
+
+const planes = z
+  .union([
+    z.boolean(),
+    z.enum(RELIEFS),
+    z.strictObject({ relief: z.enum(RELIEFS).optional(), width: length, depth: length }),
+  ])
+  .describe('mirror planes as great lines on the surface; inlaid: as strips in a second colour');
 
 const print = z.strictObject({
   size: size.optional(),
@@ -108,6 +130,9 @@ const print = z.strictObject({
   letters: letters.optional(),
   blunt: blunt.optional(),
   stand: stand.optional(),
+  base: base.optional(),
+  planes: planes.optional(),
+  key: z.boolean().optional().describe('a printed key of what the symbols at the rods mean'),
   pair: z.boolean().optional().describe('two copies: one plain, one with axes and lettered faces'),
   flat: z.boolean().optional().describe('parts turned onto the face on which they print best'),
   checks: z.boolean().optional().describe('what to know before printing and handling, measured'),
@@ -148,7 +173,8 @@ export const KNOWN_KEYS: Readonly<Record<string, readonly string[]>> = {
   'print.body': [...new Set(bodies.flatMap(({ shape }) => Object.keys(shape)))],
   'print.letters': ['relief', 'text'],
   'print.blunt': ['radius', 'bevel'],
-  'print.stand': ['text', 'braille', 'qr'],
+  'print.stand': ['text', 'braille', 'qr', 'down', 'contrast'],
+  'print.planes': ['relief', 'width', 'depth'],
 };
 
 export type RecipeInput = z.input<typeof recipeSchema>;
@@ -158,6 +184,8 @@ export type BodyInput = z.input<typeof body>;
 export type LettersInput = z.input<typeof letters>;
 export type BluntInput = z.input<typeof blunt>;
 export type StandInput = z.input<typeof stand>;
+export type BaseInput = z.input<typeof base>;
+export type PlanesInput = z.input<typeof planes>;
 export type AxesInput = z.input<typeof axes>;
 export type FaceInput = z.input<typeof faceText>;
 export type ZoneInput = z.input<typeof zoneText>;
@@ -206,6 +234,8 @@ export const printerSchema = z.strictObject({
     diameter: z.number().describe('usual rod'),
     smallest: z.number().describe('thinnest rod that prints'),
     clearance: z.number().describe('bore diameter minus rod diameter, for a push fit to be glued'),
+    press: z.number().describe('the same for bought metal rod that stays, glued in resin'),
+    slide: z.number().describe('the same for bought metal rod that slides'),
   }),
   freeClearance: z.number().describe('gap of parts that slide or lift out'),
   drains: z

@@ -14,12 +14,22 @@ export interface ReadyObject {
   readonly partNumber: string;
   readonly mesh: Mesh;
   readonly surfaces: readonly Surface[];
+  readonly within?: number;
 }
 
+/** Numbers of the objects that make one thing on the bed: each that is not within another, with those within it. */
+export const thingsOf = (objects: readonly Pick<ReadyObject, 'within'>[]): number[][] =>
+  objects.flatMap(({ within }, i) =>
+    within === undefined
+      ? [[i, ...objects.keys()].filter((other, at) => at === 0 || objects[other]!.within === i)]
+      : [],
+  );
+
 /**
- * The model part: one mesh object and one build item a body. No components, because slicers take them apart and lose
- * the names, and nothing that no item reaches, because a common slicer then refuses the file.
- * @param places millimetres, one an object
+ * The model part: one mesh object a body. Bodies that are one thing are components of an assembly, because slicers would
+ * drop loose ones onto the bed; all others are no components, because slicers take those apart and lose the names.
+ * Nothing that no item reaches, because a common slicer then refuses the file.
+ * @param places millimetres, one a thing
  * @throws FileError `metadata`
  */
 export function modelPart(model: ThreeMfModel, objects: readonly ReadyObject[], places: readonly Point[]): Uint8Array {
@@ -34,13 +44,27 @@ export function modelPart(model: ThreeMfModel, objects: readonly ReadyObject[], 
   objects.forEach((object, i) => {
     writeObject(xml, object, groups.size + 1 + i, groups);
   });
+  const items = thingsOf(objects).map((bodies, thing) => {
+    const ids = bodies.map((body) => groups.size + 1 + body);
+    const first = objects[bodies[0]!]!;
+    return { ids, first, id: ids.length === 1 ? ids[0]! : groups.size + 1 + objects.length + thing };
+  });
+  for (const { ids, first, id } of items) if (ids.length > 1) writeAssembly(xml, first, id, ids);
   xml.text('</resources>\n<build>\n');
-  objects.forEach(({ partNumber }, i) => {
-    xml.text(`<item objectid="${groups.size + 1 + i}" transform="1 0 0 0 1 0 0 0 1`);
+  items.forEach(({ id, first }, i) => {
+    xml.text(`<item objectid="${id}" transform="1 0 0 0 1 0 0 0 1`);
     for (const value of places[i]!) xml.ascii(' ').decimal(value);
-    xml.text(`" partnumber="${escaped(partNumber)}"/>\n`);
+    xml.text(`" partnumber="${escaped(first.partNumber)}"/>\n`);
   });
   return xml.text('</build>\n</model>\n').finish();
+}
+
+function writeAssembly(xml: XmlBytes, { name, partNumber }: ReadyObject, id: number, bodies: readonly number[]): void {
+  xml.text(
+    `<object id="${id}" type="model" name="${escaped(name)}" partnumber="${escaped(partNumber)}">\n<components>\n`,
+  );
+  for (const body of bodies) xml.text(`<component objectid="${body}"/>\n`);
+  xml.text('</components>\n</object>\n');
 }
 
 function metadataOf({ title, description, application, metadata }: ThreeMfModel): [string, string][] {

@@ -12,6 +12,8 @@ export interface ThreeMfObject {
   readonly mesh: Mesh;
   /** What the numbers in the mesh's `surface` mean; without these numbers all is the first surface. Never empty. */
   readonly surfaces: readonly Surface[];
+  /** Number of the object before it whose coordinates it shares: both are then one thing on the bed, in bodies. */
+  readonly within?: number;
 }
 
 /** What a 3MF file is to hold. */
@@ -26,7 +28,7 @@ export interface ThreeMfModel {
   readonly objects: readonly ThreeMfObject[];
   /**
    * Where they stand on the bed: side by side (the default), as they lie to each other in their own coordinates, or
-   * each moved by millimetres.
+   * each moved by millimetres; objects within others go along.
    */
   readonly places?: 'sideBySide' | 'inPlace' | readonly Point[];
   /** A PNG picture of the whole. */

@@ -1,11 +1,12 @@
 import { type ZippableFile, zipSync } from 'fflate';
 import type { Mesh } from '../../print/mesh.ts';
+import { together } from '../../print/part.ts';
 import type { Point } from '../check/report.ts';
 import { FileError } from '../file-error.ts';
 import { assertNotEmpty } from '../mesh/sound-mesh.ts';
 import { weldDecimals } from './decimals.ts';
 import type { ThreeMfModel } from './model.ts';
-import { modelPart } from './model-part.ts';
+import { modelPart, thingsOf } from './model-part.ts';
 import {
   CONTENT_TYPES_PATH,
   MODEL_PATH,
@@ -27,8 +28,8 @@ const STAMP = new Date(2000, 0, 1);
 const LEVEL = 2;
 
 /**
- * A 3MF file after the core specification 1.4.0, in millimetres, Z up, with one named mesh object and one build item a
- * body. Meshes are welded at six decimal places (`weldDecimals`) but not checked: read the file back and check that.
+ * A 3MF file after the core specification 1.4.0, in millimetres, Z up, with one named mesh object a
+ * body and one build item a thing, which is a body or an assembly of bodies. Meshes are welded at six decimal places (`weldDecimals`) but not checked: read the file back and check that.
  * Colours are one group each; an object whose triangles belong to several surfaces has them on every triangle, and all
  * surfaces by name as triangle sets. The same model gives the same bytes.
  * @throws FileError `empty`, `badMesh`, `notFinite`, `metadata`
@@ -40,13 +41,13 @@ export function write3mf(model: ThreeMfModel): Uint8Array {
     return { ...object, mesh };
   });
   if (objects.length === 0) throw new FileError('empty', 'There is no object to write.', 'Give at least one part.');
-  const meshes = objects.map(({ mesh }) => mesh);
+  const things = thingsOf(objects).map((bodies) => together(bodies.map((body) => objects[body]!.mesh)));
   const picture = model.thumbnail;
   const store = (text: string): ZippableFile => [new TextEncoder().encode(text), { mtime: STAMP, level: LEVEL }];
   return zipSync({
     [CONTENT_TYPES_PATH]: store(contentTypes(picture !== undefined)),
     [RELATIONSHIPS_PATH]: store(relationships(picture !== undefined)),
-    [MODEL_PATH]: [modelPart(model, objects, placesOf(model, meshes)), { mtime: STAMP, level: LEVEL }],
+    [MODEL_PATH]: [modelPart(model, objects, placesOf(model, things)), { mtime: STAMP, level: LEVEL }],
     ...(picture && { [THUMBNAIL_PATH]: [picture, { mtime: STAMP, level: 0 }] satisfies ZippableFile }),
   });
 }

@@ -63,31 +63,35 @@ function bedFinding({ name, mesh }: Part, { bed, name: printer }: PrintingProfil
   };
 }
 
+/** Overhangs of less than this in all, mm², as under letters, bridge by themselves (common practice). */
+const SPECKS = 25;
+
 function overhangFinding({ name, mesh }: Part, { overhang }: PrintingProfile): PrintingFinding {
   const level = -mesh.positions.reduce((low, v, i) => (i % 3 === 2 ? Math.min(low, v) : low), Number.POSITIVE_INFINITY);
   const area = overhangArea(mesh, [0, 0, -1], level, overhang);
   return {
     code: 'overhang',
-    severity: area > 0 ? 'warning' : 'note',
+    severity: area > SPECKS ? 'warning' : 'note',
     part: name,
     measured: area,
     figure: overhang,
     unit: 'mm²',
     source: `faces that lean more than ${overhang}° from the vertical; ${DESIGN_GUIDES}`,
     text:
-      area > 0
+      area > SPECKS
         ? `${(area / 100).toFixed(1)} cm² of the part "${name}" lean more than ${overhang}° from the vertical: ` +
           'print it with support, or cut it into halves that lie flat.'
-        : `Nothing of the part "${name}" leans more than ${overhang}° from the vertical: it prints without support.`,
+        : `${area > 0 ? 'No more than specks' : 'Nothing'} of the part "${name}" leans more than ${overhang}° from the vertical: it prints without support.`,
   };
 }
 
 function wallFinding(
   bench: Workbench,
-  { name, mesh }: Part,
+  { name, mesh, surfaces }: Part,
   { wall, usualWall, feature }: PrintingProfile,
 ): PrintingFinding {
-  const { thinnest, how } = thinnestWall(bench, mesh);
+  const fine = surfaces.findIndex((surface) => surface.fine);
+  const { thinnest, how } = thinnestWall(bench, mesh, fine);
   const base = {
     code: 'thin-wall',
     part: name,

@@ -22,16 +22,15 @@ const FACING = -0.5;
 /**
  * The thinnest place of a part: of a convex body its smallest width, else the shortest way through, by rays from the
  * middles of its triangles straight inwards; when there are very many, evenly chosen ones.
+ * @param fine number of a surface of strokes, from which no rays start
  */
-export function thinnestWall(bench: Workbench, mesh: Mesh): Thickness {
+export function thinnestWall(bench: Workbench, mesh: Mesh, fine?: number): Thickness {
   const hull = hullOf(bench, mesh);
   if (meshVolume(mesh) > (1 - CONVEX) * meshVolume(hull)) return { thinnest: smallestWidth(hull), how: CONVEX_WIDTH };
   const solid = bench.solid({ positions: mesh.positions, triangles: mesh.triangles });
-  const lengths = rays(mesh).map(({ from, inwards }) => wayThrough(solid, from, inwards));
-  return {
-    thinnest: lengths.reduce((least, length) => Math.min(least, length), Number.POSITIVE_INFINITY),
-    how: RAYS,
-  };
+  const lengths = rays(mesh, fine).map(({ from, inwards }) => wayThrough(solid, from, inwards));
+  const thinnest = lengths.reduce((least, length) => Math.min(least, length), Number.POSITIVE_INFINITY);
+  return Number.isFinite(thinnest) ? { thinnest, how: RAYS } : { thinnest: smallestWidth(hull), how: CONVEX_WIDTH };
 }
 
 /**
@@ -81,12 +80,13 @@ function widthAlong(positions: Float64Array, direction: Vector): number {
 const SLIVER = 1e-4;
 const ALIKE = 1 - 1e-6;
 
-function rays({ positions, triangles }: Mesh): { from: Vector; inwards: Vector }[] {
+function rays({ positions, triangles, surface }: Mesh, fine?: number): { from: Vector; inwards: Vector }[] {
   const all: { from: Vector; inwards: Vector }[] = [];
   const count = triangles.length / 3;
   const every = Math.max(1, count / MOST_RAYS);
   for (let place = 0; place < count; place += every) {
     const t = 3 * Math.floor(place);
+    if (fine !== undefined && surface?.[t / 3] === fine) continue;
     const [a, b, c] = [triangles[t]!, triangles[t + 1]!, triangles[t + 2]!].map((vertex) => at(positions, vertex));
     const normal = cross(minus(b!, a!), minus(c!, a!));
     const size = lengthOf(normal);

@@ -7,12 +7,14 @@ import { unit, type Vector, vectorAt } from './vector.ts';
 export type Resting = number | Vector;
 
 /** The unit vector that points at the bed; without a wish that of the largest face. */
-export function downwards({ measures }: ClosedShape, resting: Resting | undefined): Vector {
+export function downwards(shape: ClosedShape, resting: Resting | undefined): Vector {
   if (resting !== undefined && typeof resting !== 'number') return unit(resting);
-  const { area, faces, normals } = measures;
-  const largest = faces.reduce((best, face) => (area[face]! > area[best]! * (1 + 1e-9) ? face : best));
-  return vectorAt(normals, resting ?? largest);
+  return vectorAt(shape.measures.normals, resting ?? largestFace(shape));
 }
+
+/** Plane number; of equal ones the first. */
+export const largestFace = ({ measures: { area, faces } }: ClosedShape): number =>
+  faces.reduce((best, face) => (area[face]! > area[best]! * (1 + 1e-9) ? face : best));
 
 /** A face in brackets, by its plane number. */
 export function faceName({ solid, crystal }: ClosedShape, plane: number): string {

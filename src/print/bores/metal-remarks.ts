@@ -4,7 +4,15 @@ import { type BoreEnd, boreRadius, type MetalPlan } from './metal-plan.ts';
 import type { CutRod } from './metal-rods.ts';
 
 const number = (value: number): string => String(Number(value.toFixed(1)));
-const towards = (bores: readonly BoreEnd[]): string => bores.map(({ end }) => printZone(end.direction)).join(', ');
+/** More names than this nobody reads. */
+const MOST_NAMES = 6;
+/** Bores by their directions, or by their number and kinds. */
+function towards(bores: readonly BoreEnd[]): string {
+  if (bores.length <= MOST_NAMES) return `towards ${bores.map(({ end }) => printZone(end.direction)).join(', ')}`;
+  const kinds = new Map<string, number>();
+  for (const { line } of bores) kinds.set(axisWords(line.symbol), (kinds.get(axisWords(line.symbol)) ?? 0) + 1);
+  return `at ${[...kinds].map(([words, count]) => `${count} ends of ${words} axes`).join(' and ')}`;
+}
 
 /** What was decided: which rods pass, where mouths are no clean holes in a face, and what to cut. */
 export function boreRemarks(bores: readonly BoreEnd[], rods: readonly CutRod[], plan: MetalPlan): string[] {
@@ -14,15 +22,19 @@ export function boreRemarks(bores: readonly BoreEnd[], rods: readonly CutRod[], 
 function passing(bores: readonly BoreEnd[], { wall, depth }: MetalPlan): string[] {
   const [through] = bores.filter((bore) => bore.through);
   const shortened = bores.filter((bore) => bore.shortened);
-  const split = bores.filter((bore) => !bore.through).map(({ line }) => line);
+  const split = [...new Set(bores.filter((bore) => !bore.through).map(({ line }) => line))];
+  const named =
+    split.length > MOST_NAMES
+      ? `those of the other ${split.length} axes`
+      : `those along ${split.map(({ direction }) => printZone(direction)).join(', ')}`;
   const remarks: string[] = [];
   if (through && split.length > 0)
     remarks.push(
-      `The ${axisWords(through.line.symbol)} bore along ${printZone(through.line.direction)} passes through the centre; those along ${[...new Set(split)].map(({ direction }) => printZone(direction)).join(', ')} are blind from both ends, with at least ${wall} mm of plastic between all bores.`,
+      `The ${axisWords(through.line.symbol)} bore along ${printZone(through.line.direction)} passes through the centre; ${named} are blind from both ends, with at least ${wall} mm of plastic between all bores.`,
     );
   if (shortened.length > 0 && depth !== 'through')
     remarks.push(
-      `Bores towards ${towards(shortened)} end before the ${number(depth.blind)} mm asked for, so that ${wall} mm of plastic stay between bores.`,
+      `Bores ${towards(shortened)} end before the ${number(depth.blind)} mm asked for, so that ${wall} mm of plastic stay between bores.`,
     );
   return remarks;
 }
@@ -35,7 +47,7 @@ function mouths(bores: readonly BoreEnd[], plan: MetalPlan): string[] {
   const over = inFaces.filter(({ mouth }) => mouth.room < radius);
   const thin = inFaces.filter(({ mouth }) => mouth.room >= radius && mouth.room < radius + plan.wall);
   const told = (which: readonly BoreEnd[], words: string): string[] =>
-    which.length === 0 ? [] : [`Bores towards ${towards(which)} ${words}`];
+    which.length === 0 ? [] : [`Bores ${towards(which)} ${words}`];
   return [
     ...told(
       at('edge'),

@@ -9,7 +9,8 @@ export interface Mouth {
   readonly exit: number;
   /**
    * Radius of the widest round bore along the axis that leaves through one face only; 0 where the axis leaves through an
-   * edge or a corner, infinite where nothing bounds the face.
+   * edge or a corner, infinite where only faces bound it that run along the axis or lean over the mouth; a bore as wide
+   * as the crystal allows at its centre stays clear of those.
    */
   readonly room: number;
 }

@@ -2,9 +2,10 @@ import type { Manifold } from 'manifold-3d';
 import type { FacePlane } from '../../shape/face-planes.ts';
 import { ObjectError } from '../../shape/object-error.ts';
 import type { Workbench } from '../kit.ts';
+import { betweenLines, type SurfaceLine } from './between-lines.ts';
 import { type RodExit, roomOn } from './face-room.ts';
-import { fieldOf, toField } from './field.ts';
-import { fitBox } from './fit-box.ts';
+import { type Field, fieldOf, quarterTurn, toField } from './field.ts';
+import { fitBox, type Spot } from './fit-box.ts';
 import { flatOutline } from './flat-outline.ts';
 import { layOutText, stackLines } from './lay-out.ts';
 import { textOutlines } from './outlines.ts';
@@ -36,9 +37,10 @@ export function letterBase(
     readonly style: LetterStyle;
     readonly planes?: readonly FacePlane[];
     readonly avoid?: readonly RodExit[];
+    readonly strips?: readonly SurfaceLine[];
   },
 ): BaseLettering {
-  const { style, planes = [], avoid = [] } = options;
+  const { style, planes = [], avoid = [], strips = [] } = options;
   const { typeface, relief, depth } = style;
   const lines = options.lines.filter((line) => line.trim() !== '');
   if (lines.length === 0) throw new ObjectError('text', 'there is no text for the resting face', 'give a line of text');
@@ -47,18 +49,23 @@ export function letterBase(
     PITCH * typeface.capital,
     'middle',
   );
-  const field = fieldOf(rest.normal, rest.distance);
-  const room = roomOn(flatOutline(body, rest, field), field, planes, avoid, style);
   const { left, right, top, bottom } = layout.box;
   const box = { width: right - left, height: top - bottom };
   const { least, enough } = wantedSizes(style, layout);
-  const spot = room && fitBox(room.polygon, room.sides, room.discs, box, { least, enough });
+  const level = fieldOf(rest.normal, rest.distance);
+  const spot = [level, quarterTurn(level)]
+    .flatMap((field) => betweenLines(flatOutline(body, rest, field), field, strips).map((piece) => ({ field, piece })))
+    .flatMap(({ field, piece }) => {
+      const room = roomOn(piece, field, planes, avoid, style);
+      return room ? [{ field, ...fitBox(room.polygon, room.sides, room.discs, box, { least, enough }) }] : [];
+    })
+    .reduce<(Spot & { field: Field }) | null>((best, one) => (best && one.size <= 1.01 * best.size ? best : one), null);
   if (!spot || spot.size < least) throw tooSmall(lines, spot?.size ?? 0, least, style);
   const size = Math.min(spot.size, enough);
   const shift = [spot.centre[0] - (size * (left + right)) / 2, spot.centre[1] - (size * (bottom + top)) / 2] as const;
   const [from, to] = relief === 'engraved' ? [-depth, OVERSHOOT] : [-ROOT, depth];
   const upright = bench.prism(textOutlines(typeface, layout, size, shift), from, to);
-  const letters = bench.place(upright, toField(field));
+  const letters = bench.place(upright, toField(spot.field));
   return { ...applyLetters(bench, body, [letters], relief), height: size * typeface.capital, letters };
 }
 

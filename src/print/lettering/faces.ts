@@ -4,6 +4,7 @@ import { miller } from '../../crystal/spaces.ts';
 import { facePlanes } from '../../shape/face-planes.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
 import type { Workbench } from '../kit.ts';
+import { betweenLines, type SurfaceLine } from './between-lines.ts';
 import { facePolygon, type RodExit, roomOn } from './face-room.ts';
 import { type Field, fieldOf, quarterTurn, toField } from './field.ts';
 import { fitBox } from './fit-box.ts';
@@ -58,20 +59,31 @@ export function letterFaces(
   body: Manifold,
   shape: ClosedShape,
   scale: number,
-  options: { readonly text: FaceText; readonly style: LetterStyle; readonly avoid?: readonly RodExit[] },
+  options: {
+    readonly text: FaceText;
+    readonly style: LetterStyle;
+    readonly avoid?: readonly RodExit[];
+    readonly lines?: readonly SurfaceLine[];
+    /** Plane number of a face that is to stay as it is. */
+    readonly leave?: number;
+  },
 ): FaceLettering {
-  const { text: kind, style, avoid = [] } = options;
+  const { text: kind, style, avoid = [], lines = [], leave } = options;
   const planes = facePlanes(shape, scale);
   const faces: LetteredFace[] = [];
   const tooSmall: string[] = [];
   shape.measures.faces.forEach((face, i) => {
+    if (face === leave) return;
     const { normal, distance } = planes[i]!;
     const text = faceText(shape, kind, face);
     const layout = layOutText(style.typeface, text, gapOf(style.typeface));
     const level = fieldOf(normal, distance);
     const chosen = [level, quarterTurn(level)]
-      .map((field, turn): Chosen | null => {
-        const room = roomOn(facePolygon(shape, scale, face, field), field, planes, avoid, style);
+      .flatMap((field, turn) =>
+        betweenLines(facePolygon(shape, scale, face, field), field, lines).map((piece) => ({ field, turn, piece })),
+      )
+      .map(({ field, turn, piece }): Chosen | null => {
+        const room = roomOn(piece, field, planes, avoid, style);
         if (!room) return null;
         const { left, right, top, bottom } = layout.box;
         const box = { width: right - left, height: top - bottom };
@@ -81,7 +93,8 @@ export function letterFaces(
           ...fitBox(room.polygon, room.sides, room.discs, box, wantedSizes(style, layout)),
         };
       })
-      .find((one) => one !== null && one.size >= wantedSizes(style, layout).least);
+      .filter((one) => one !== null && one.size >= wantedSizes(style, layout).least)
+      .reduce<Chosen | null>((best, one) => (best && !isBetter(one!, best) ? best : one), null);
     if (!chosen) tooSmall.push(faceName(shape, face));
     else faces.push(lettersAt(bench, style, layout, face, chosen));
   });
@@ -94,6 +107,9 @@ export function letterFaces(
     remarks: tell(faces, tooSmall, style),
   };
 }
+
+/** Level before upwards, then the larger by more than a hundredth, then the first. */
+const isBetter = (one: Chosen, other: Chosen): boolean => one.turned === other.turned && one.size > 1.01 * other.size;
 
 function lettersAt(
   bench: Workbench,

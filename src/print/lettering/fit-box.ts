@@ -16,6 +16,8 @@ export interface Wanted {
 const GRID = 16;
 const SEEDS = 3;
 const FINEST = 1e-4;
+/** Relative gain below which a step is rounding, along a crest that is level for instance. */
+const GAIN = 1e-6;
 /** Share of the best size that a place nearer to the middle must keep, and how many places are tried. */
 const STAYS = 0.96;
 const STEPS = 32;
@@ -76,8 +78,8 @@ function climb(seed: Spot, room: BoxRoom, firstStep: number): Spot {
       return { centre, size: room.sizeAt(centre) };
     });
     const better = trials.reduce(larger, best);
-    if (better === best) step /= 2;
-    best = better;
+    if (better.size - best.size > GAIN * Math.abs(best.size)) best = better;
+    else step /= 2;
   }
   return best;
 }

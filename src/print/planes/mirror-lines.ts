@@ -41,8 +41,7 @@ export interface MirrorLined {
 
 /**
  * The great line of each mirror plane on the crystal's surface, as a strip of even width about the plane and of even depth
- * under each face. To be called before rods are joined and raised letters set: what stands out where a line runs is
- * cut with the line.
+ * under each face. Rods are joined afterwards, so that no line cuts through them; bores are cut into body and inlay alike.
  * @param body the crystal in its own frame
  * @throws ObjectError `plane` when the strips would cover the whole crystal, `wall` when their depth leaves nothing of it
  */

@@ -8,9 +8,12 @@ import { rodOutline, terminal, toEnd } from './solid.ts';
  * them, so that nothing needs to cross at the centre.
  */
 export function fuseRods(bench: Workbench, body: Manifold, plan: RodPlan): Manifold {
-  const rods = plan.ends.flat().map((end) => bench.place(rodSolid(bench, end, plan), toEnd(end.end)));
-  return bench.union([body, ...rods]);
+  return bench.union([body, ...rodSolids(bench, plan)]);
 }
+
+/** Rods with their ends, in the crystal's frame. */
+export const rodSolids = (bench: Workbench, plan: RodPlan): Manifold[] =>
+  plan.ends.flat().map((end) => bench.place(rodSolid(bench, end, plan), toEnd(end.end)));
 
 function rodSolid(bench: Workbench, { line, root, base, tip }: RodEnd, plan: RodPlan): Manifold {
   const shaft = bench.prism([rodOutline(plan.diameter)], Math.max(0, root - plan.diameter), (base + tip) / 2);

@@ -28,12 +28,13 @@ export function skinCells(shape: ClosedShape, scale: number, depth: number): Cel
   if (!inner) return null;
   const { measures, solid } = shape;
   const pool = new CornerPool();
-  const skins: CellFace[][] = measures.faces.map((face) => {
-    const outer = faceCorners(solid, face).map((corner) => times(vectorAt(measures.positions, corner), scale));
-    return [{ corners: pool.polygon(outer), behind: null }];
-  });
+  const outlines = measures.faces.map((face) =>
+    faceCorners(solid, face).map((corner) => times(vectorAt(measures.positions, corner), scale)),
+  );
+  const skins = outlines.map((outline): CellFace[] => [{ corners: pool.polygon(outline), behind: null }]);
   const core = innerFaces(inner, pool, measures.faces, skins);
-  for (const { faces, corners } of skinWalls(facePlanes(shape, scale), depth, measures.circumscribedRadius * scale)) {
+  const radius = measures.circumscribedRadius * scale;
+  for (const { faces, corners } of skinWalls(facePlanes(shape, scale), outlines, depth, radius)) {
     const cycle = pool.polygon(corners);
     const [f, g] = faces;
     // The wall's polygon runs counter-clockwise about n_f − n_g, which points out of the cell of g.

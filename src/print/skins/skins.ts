@@ -102,6 +102,7 @@ function inOnePlace(pieces: readonly Piece[], down: readonly [number, number, nu
       surfaces: [surface],
       mesh,
       placed: [mesh],
+      ...(name !== 'core' && { with: 'core' }),
     }),
   );
   const lying = lieOn(assemble(parts), down).positions;

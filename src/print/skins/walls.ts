@@ -3,7 +3,7 @@ import { across, dot, minus, plus, times, type Vector } from '../bodies/vector.t
 
 type Point = readonly [number, number];
 
-/** Where the skins of two faces touch: a convex polygon, counter-clockwise seen from the second face. */
+/** Where the skins of two faces touch: a convex polygon, counter-clockwise seen from the first face. */
 export interface Wall {
   /** Places of the two faces in the list of planes. */
   readonly faces: readonly [number, number];
@@ -14,18 +14,47 @@ export interface Wall {
  * The skin of a face is what lies nearer to it than to any other face, and no deeper than the skins. Two skins meet in the
  * plane of points that are equally deep under both faces; of that plane every other face, the surface and the depth cut
  * away a half-plane. (The boundaries of these cells are the medial axis of the crystal.)
+ * @param faces outlines of the faces, in the order of the planes
  * @param radius of a sphere about the crystal
  */
-export function skinWalls(planes: readonly FacePlane[], depth: number, radius: number): Wall[] {
+export function skinWalls(
+  planes: readonly FacePlane[],
+  faces: readonly (readonly Vector[])[],
+  depth: number,
+  radius: number,
+): Wall[] {
   const walls: Wall[] = [];
+  const boxes = faces.map((corners) => boxAbout(corners, depth));
   planes.forEach((f, i) => {
     for (let j = i + 1; j < planes.length; j++) {
+      if (!meet(boxes[i]!, boxes[j]!)) continue;
       const corners = wallBetween(f, planes[j]!, planes, depth, radius);
       if (corners) walls.push({ faces: [i, j], corners });
     }
   });
   return walls;
 }
+
+interface Box {
+  readonly low: Vector;
+  readonly high: Vector;
+}
+
+/**
+ * Holds the skin of a face: a ball about a point of it that touches the face lies in the crystal, so the point is no
+ * farther than the depth from the face itself, not only from its plane.
+ */
+function boxAbout(corners: readonly Vector[], depth: number): Box {
+  const extreme = (axis: 0 | 1 | 2, side: 1 | -1): number =>
+    side * Math.max(...corners.map((corner) => side * corner[axis])) + side * (depth + ON_LINE);
+  return {
+    low: [extreme(0, -1), extreme(1, -1), extreme(2, -1)],
+    high: [extreme(0, 1), extreme(1, 1), extreme(2, 1)],
+  };
+}
+
+const meet = (a: Box, b: Box): boolean =>
+  ([0, 1, 2] as const).every((axis) => a.low[axis] <= b.high[axis] && b.low[axis] <= a.high[axis]);
 
 function wallBetween(
   f: FacePlane,

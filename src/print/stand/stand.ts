@@ -135,7 +135,7 @@ function partsOf(
     return [part('stand', purpose, bench.mesh(bench.union([ground, ...inked]), 0), [stand, ink])];
   }
   const own = (name: string, what: string, solids: readonly Manifold[]): Part[] =>
-    solids.length === 0 ? [] : [part(name, what, bench.mesh(bench.union(solids), 0), [ink])];
+    solids.length === 0 ? [] : [{ ...part(name, what, bench.mesh(bench.union(solids), 0), [ink]), with: 'stand' }];
   return [
     part('stand', purpose, bench.mesh(ground, 0), [stand]),
     ...own('stand-letters', "the stand's letters and braille, in a second colour, printed on it in one job", letters),
