@@ -22,7 +22,13 @@ async function cost(recipe: RecipeInput): Promise<number> {
 }
 
 /** Everything at once: letters, bores for rods, a stand with its label, all files. */
-export const WHOLE: Print = { size: 70, letters: true, axes: { fit: 'separate' }, stand: true, files: ['stl', '3mf', 'glb'] };
+export const WHOLE: Print = {
+  size: 70,
+  letters: true,
+  axes: { fit: 'separate' },
+  stand: true,
+  files: ['stl', '3mf', 'glb'],
+};
 
 const OPTIONS: readonly (readonly [string, Print])[] = [
   ['solid', {}],
@@ -47,7 +53,11 @@ export async function optionCosts(): Promise<Table> {
   const rows: string[][] = [];
   for (const [name, print] of OPTIONS)
     rows.push([name, (await cost({ mineral: 'quartz', print: { size: 70, ...print } })).toFixed(0)]);
-  return { title: 'make of quartz, 70 mm, in a warm process, STL unless said, milliseconds, median', head: ['', 'ms'], rows };
+  return {
+    title: 'make of quartz, 70 mm, in a warm process, STL unless said, milliseconds, median',
+    head: ['', 'ms'],
+    rows,
+  };
 }
 
 /** Forms of m-3m in the order of their largest index, all on one sphere, so that each shows. */

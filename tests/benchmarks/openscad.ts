@@ -73,12 +73,16 @@ function scad({ shape, millimetresPerUnit }: Made): string {
     const normal = [...measures.normals.subarray(3 * face, 3 * face + 3)];
     const corners = faces[i]!.map((corner) => points[corner]!);
     const middle = [0, 1, 2].map((axis) => corners.reduce((sum, at) => sum + at[axis]!, 0) / corners.length);
-    const [polar, around] = [Math.acos(normal[2]!), Math.atan2(normal[1]!, normal[0]!)].map((angle) => (angle * 180) / Math.PI);
+    const [polar, around] = [Math.acos(normal[2]!), Math.atan2(normal[1]!, normal[0]!)].map(
+      (angle) => (angle * 180) / Math.PI,
+    );
     const letter = crystal.forms[solid.planes.form[face]!]!.letter;
     const text = `text("${letter}", size = ${LETTER.height}, halign = "center", valign = "center")`;
     return `translate(${JSON.stringify(middle)}) rotate([0, ${polar}, ${around}]) translate([0, 0, -${LETTER.depth}]) linear_extrude(2) ${text};`;
   });
-  const bores = AXES.map((turn) => `rotate(${JSON.stringify(turn)}) cylinder(d = ${BORE}, h = 200, center = true, $fn = 48);`);
+  const bores = AXES.map(
+    (turn) => `rotate(${JSON.stringify(turn)}) cylinder(d = ${BORE}, h = 200, center = true, $fn = 48);`,
+  );
   const crystalText = `polyhedron(${JSON.stringify(points)}, ${JSON.stringify(faces.map((face) => [...face].reverse()))});`;
   return `difference() {\n${[crystalText, ...bores, ...letters].join('\n')}\n}\n`;
 }

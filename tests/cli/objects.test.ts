@@ -73,16 +73,46 @@ const line500 = 'all '.repeat(125).trim();
 
 /** What cannot be made: the recipe's `print`, and what the message and its advice must say. */
 const impossible: [string, string, RegExp, RegExp][] = [
-  ['a wall thicker than the crystal', '{ size: 20, body: { kind: hollow, wall: 15 } }', /walls of 15 mm leave nothing to hollow out.* 10 mm/, /wall between 0 and 9.99 mm/],
+  [
+    'a wall thicker than the crystal',
+    '{ size: 20, body: { kind: hollow, wall: 15 } }',
+    /walls of 15 mm leave nothing to hollow out.* 10 mm/,
+    /wall between 0 and 9.99 mm/,
+  ],
   ['struts that fill the crystal', '{ size: 20, body: { kind: frame, strut: 24 } }', /struts of 24 mm fill/, /thinner/],
   ['a bead without a centre of inversion', 'bead', /422 has no centre of inversion/, /Leave the bead away/],
-  ['drains without room', '{ size: 8, body: { kind: hollow, wall: 3, drains: true } }', /drain holes of 3.5 mm/, /Choose/],
+  [
+    'drains without room',
+    '{ size: 8, body: { kind: hollow, wall: 3, drains: true } }',
+    /drain holes of 3.5 mm/,
+    /Choose/,
+  ],
   ['dowels without room', '{ size: 6, body: halves }', /no room for/, /larger crystal/],
-  ['a gap that leaves nothing', '{ size: 20, body: { kind: sectors, gap: 30 } }', /gap of 30 mm leaves nothing/, /smaller gap/],
-  ['units with a gap that leaves nothing', '{ size: 20, body: { kind: units, gap: 12 } }', /gap of 12 mm/, /smaller gap/],
-  ['a blunting radius that is too large', '{ size: 20, blunt: 11 }', /radius of 11 mm does not fit.*10/, /smaller radius/],
+  [
+    'a gap that leaves nothing',
+    '{ size: 20, body: { kind: sectors, gap: 30 } }',
+    /gap of 30 mm leaves nothing/,
+    /smaller gap/,
+  ],
+  [
+    'units with a gap that leaves nothing',
+    '{ size: 20, body: { kind: units, gap: 12 } }',
+    /gap of 12 mm/,
+    /smaller gap/,
+  ],
+  [
+    'a blunting radius that is too large',
+    '{ size: 20, blunt: 11 }',
+    /radius of 11 mm does not fit.*10/,
+    /smaller radius/,
+  ],
   ['bevels that leave no face', '{ size: 20, blunt: { bevel: 40 } }', /bevels 40 mm wide leave no face/, /narrower/],
-  ['a stand under a frame', '{ body: frame, stand: true }', /body of kind frame is not made together with a stand/, /two models/],
+  [
+    'a stand under a frame',
+    '{ body: frame, stand: true }',
+    /body of kind frame is not made together with a stand/,
+    /two models/,
+  ],
   ['letters on halves', '{ body: halves, letters: true }', /halves is not made together with letters/, /two models/],
   ['axes in units', '{ body: units, axes: true }', /units is not made together with axes/, /two models/],
   [
@@ -93,7 +123,12 @@ const impossible: [string, string, RegExp, RegExp][] = [
   ],
   ['Chinese text', '{ stand: { text: [水晶], braille: false } }', /no sign for .*水.*晶/, /Latin letters/],
   ['text that has no braille', '{ stand: { text: [Quartz & co] } }', /braille table has no sign for &/, /Use letters/],
-  ['a plaque line of 500 characters', `{ stand: { text: [${line500}] } }`, /line 1 .* has 499 characters; a line may have \d+/, /Shorten/],
+  [
+    'a plaque line of 500 characters',
+    `{ stand: { text: [${line500}] } }`,
+    /line 1 .* has 499 characters; a line may have \d+/,
+    /Shorten/,
+  ],
   ['a blank plaque line', '{ stand: { text: [Quartz, " "] } }', /line 2 .* is blank/, /Leave it out/],
   ['too many plaque lines', `{ stand: { text: [${'a, '.repeat(40)}b] } }`, /41 .*lines; it may have \d+/, /Keep to/],
   ['a line wider than the plaque', '{ stand: { text: [a rather long description] } }', /is \d+ mm wide/, /break it/],

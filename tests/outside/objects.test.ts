@@ -152,7 +152,16 @@ describe.runIf(canRun('prusa-slicer'))('a G-code', () => {
       const { weldFloat32 } = await import('../../src/files/mesh/weld.ts');
       const path = join(folder, `flat-${mineral}-${part.name}.stl`);
       writeFileSync(path, writeStl(weldFloat32(part.mesh), 'flat'));
-      const solid = ['--fill-density', '100%', '--fill-pattern', 'rectilinear', '--skirts', '0', '--layer-height', '0.2'];
+      const solid = [
+        '--fill-density',
+        '100%',
+        '--fill-pattern',
+        'rectilinear',
+        '--skirts',
+        '0',
+        '--layer-height',
+        '0.2',
+      ];
       run('prusa-slicer', '--export-gcode', ...solid, '-o', `${path}.gcode`, path);
       const used = Number(/filament used \[cm3\] = ([\d.]+)/.exec(readFileSync(`${path}.gcode`, 'utf8'))?.[1]);
       expect(Math.abs((used * 1000) / meshVolume(part.mesh) - 1)).toBeLessThan(0.05);

@@ -40,7 +40,9 @@ const ideal = ({ shape, millimetresPerUnit }: Made): number => shape.measures.vo
 
 /** mm³ of all copies of the parts whose name the pattern fits. */
 const volumeOf = ({ parts }: Made, name: RegExp): number =>
-  parts.filter((part) => name.test(part.name)).reduce((sum, { mesh, placed }) => sum + placed.length * meshVolume(mesh), 0);
+  parts
+    .filter((part) => name.test(part.name))
+    .reduce((sum, { mesh, placed }) => sum + placed.length * meshVolume(mesh), 0);
 
 /** How much of the ideal crystal its own parts may fill: at least, and less than. From what each kind takes or adds. */
 const SHARE: Readonly<Record<KindName, readonly [number, number]>> = {
@@ -150,31 +152,29 @@ describe('numbers of pieces', () => {
 
 describe('objects of random crystals', () => {
   const chosen = fc.constantFrom(
-    ...KIND_NAMES.flatMap((kind) => KINDS[kind].variants.map((variant): { kind: KindName; variant: Print } => ({ kind, variant }))),
+    ...KIND_NAMES.flatMap((kind) =>
+      KINDS[kind].variants.map((variant): { kind: KindName; variant: Print } => ({ kind, variant })),
+    ),
   );
 
-  it(
-    'are made, sound, or refused with a reason',
-    async () => {
-      await fc.assert(
-        fc.asyncProperty(
-          crystals,
-          chosen,
-          fc.constantFrom(...SIZES),
-          fc.constantFrom(...FILES),
-          async (recipe, { kind, variant }, size, files) => {
-            const print: Print = { size, files: [...files], ...variant };
-            const made = await madeOrRefused({ ...recipe, print }, kind, random);
-            if (made) expectPlausible(made, kind, print, false);
-          },
-        ),
-        { numRuns: Math.min(runs(60), 300), endOnFailure: true },
-      );
-      const { made, refused } = random;
-      expect(refused.length / (made + refused.length), refused.join('; ')).toBeLessThan(REFUSED.random);
-    },
-    600_000,
-  );
+  it('are made, sound, or refused with a reason', async () => {
+    await fc.assert(
+      fc.asyncProperty(
+        crystals,
+        chosen,
+        fc.constantFrom(...SIZES),
+        fc.constantFrom(...FILES),
+        async (recipe, { kind, variant }, size, files) => {
+          const print: Print = { size, files: [...files], ...variant };
+          const made = await madeOrRefused({ ...recipe, print }, kind, random);
+          if (made) expectPlausible(made, kind, print, false);
+        },
+      ),
+      { numRuns: Math.min(runs(60), 300), endOnFailure: true },
+    );
+    const { made, refused } = random;
+    expect(refused.length / (made + refused.length), refused.join('; ')).toBeLessThan(REFUSED.random);
+  }, 600_000);
 
   afterAll(() => {
     if (long) console.log(`Refused of presets: ${counted(presets)}\nRefused of random crystals: ${counted(random)}`);

@@ -234,3 +234,26 @@ describe('numbers', () => {
 function leastOf(positions: Float64Array, axis: number): number {
   return positions.reduce((least, value, i) => (i % 3 === axis ? Math.min(least, value) : least), Infinity);
 }
+
+describe('bodies that are printed in one job', () => {
+  const inlay: ThreeMfObject = { name: 'Inlay', partNumber: 'inlay', mesh: cube(2), surfaces: [ORANGE], within: 0 };
+  const model = modelOf([plain, inlay, twoFaced]);
+
+  it('are components of one object with one build item, so that no slicer drops one onto the bed', () => {
+    const xml = xmlOf(model);
+    expect(xml.match(/<item /g)).toHaveLength(2);
+    const [, first, second] =
+      /<components>\n<component objectid="(\d+)"\/>\n<component objectid="(\d+)"\/>\n<\/components>/.exec(xml)!;
+    expect(xml).toMatch(new RegExp(`<object id="${first}"[^>]* name="Cube"`));
+    expect(xml).toMatch(new RegExp(`<object id="${second}"[^>]* name="Inlay"`));
+    expect(xml.match(/<components>/g)).toHaveLength(1);
+  });
+
+  it('keep their places to each other', () => {
+    const { objects, unused } = read3mf(write3mf(model));
+    expect(unused).toEqual([]);
+    expect(objects.map(({ name }) => name)).toEqual(['Cube', 'Inlay', 'Cube & co']);
+    expect(objects[1]!.transform).toEqual(objects[0]!.transform);
+    expect(objects[2]!.transform).not.toEqual(objects[0]!.transform);
+  });
+});
