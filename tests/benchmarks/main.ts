@@ -1,5 +1,7 @@
 import { kernel } from './kernel.ts';
 import { cold, memory, warm } from './make.ts';
+import { growthWithFaces, objectMemory, optionCosts } from './objects.ts';
+import { openscad } from './openscad.ts';
 import { print, type Table } from './statistics.ts';
 import { stl } from './stl.ts';
 
@@ -10,3 +12,7 @@ show(stl());
 show(await warm());
 show(cold());
 show(memory());
+show(await optionCosts());
+show(await growthWithFaces());
+show(objectMemory());
+show(await openscad());

@@ -6,7 +6,7 @@ import { exponent, median, type Table } from './statistics.ts';
 
 type Print = NonNullable<RecipeInput['print']>;
 
-const RUNS = 9;
+const RUNS = 5;
 
 const divisor = (a: number, b: number): number => (b === 0 ? a : divisor(b, a % b));
 

@@ -22,7 +22,7 @@ describe('flags for objects', () => {
     [['--letters'], ['quartz.stl'], /Letters on 18 faces/],
     [['-l', 'raised', '--blunt'], ['quartz.stl'], /rounded with a radius of 0.75 mm/],
     [['--blunt', '1.5'], ['quartz.stl'], /rounded with a radius of 1.5 mm/],
-    [['--stand'], ['quartz-body.stl', 'quartz-stand-letters.stl', 'quartz-stand.stl'], /The stand is \d/],
+    [['--stand'], ['quartz-body.stl', 'quartz-stand.stl', 'quartz.stl'], /The stand is \d/],
     [['--files', '3mf'], ['quartz.3mf'], /closed, checked/],
     [['--files', 'glb,stl'], ['quartz.glb', 'quartz.stl'], /for screens/],
     [['-f', 'stl, 3mf,glb', '--axes', '--letters'], ['quartz.3mf', 'quartz.glb', 'quartz.stl'], /with rods/],

@@ -1,28 +1,28 @@
-import { at, cross, dot, lengthOf, minus, plus, scaled, type Vector } from '../handling/vectors.ts';
 import { type Mesh, meshVolume } from '../mesh.ts';
+import { cross, dot, length, minus, plus, times, type Vector, vectorAt } from '../vectors.ts';
 import type { PrintingProfile } from './profile.ts';
 
 /** Centre of mass of a closed mesh of even density. */
 export function centreOfMass({ positions, triangles }: Mesh): Vector {
-  const zero = at(positions, 0);
+  const zero = vectorAt(positions, 0);
   let [sum, sixfold]: [Vector, number] = [[0, 0, 0], 0];
   for (let t = 0; t < triangles.length; t += 3) {
-    const a = minus(at(positions, triangles[t]!), zero);
-    const b = minus(at(positions, triangles[t + 1]!), zero);
-    const c = minus(at(positions, triangles[t + 2]!), zero);
+    const a = minus(vectorAt(positions, triangles[t]!), zero);
+    const b = minus(vectorAt(positions, triangles[t + 1]!), zero);
+    const c = minus(vectorAt(positions, triangles[t + 2]!), zero);
     const pyramid = dot(a, cross(b, c));
     sum = plus(sum, plus(plus(a, b), c), pyramid / 4);
     sixfold += pyramid;
   }
-  return plus(zero, scaled(sum, 1 / sixfold));
+  return plus(zero, times(sum, 1 / sixfold));
 }
 
 export function surfaceArea({ positions, triangles }: Mesh): number {
   let twice = 0;
   for (let t = 0; t < triangles.length; t += 3) {
-    const a = at(positions, triangles[t]!);
-    const [b, c] = [at(positions, triangles[t + 1]!), at(positions, triangles[t + 2]!)];
-    twice += lengthOf(cross(minus(b, a), minus(c, a)));
+    const a = vectorAt(positions, triangles[t]!);
+    const [b, c] = [vectorAt(positions, triangles[t + 1]!), vectorAt(positions, triangles[t + 2]!)];
+    twice += length(cross(minus(b, a), minus(c, a)));
   }
   return twice / 2;
 }

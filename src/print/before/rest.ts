@@ -1,9 +1,9 @@
 import type { Mat4 } from 'manifold-3d';
 import { hullOf } from '../handling/hull.ts';
 import { convexHull, type Point } from '../handling/rectangle-fit.ts';
-import { across, at, cross, dot, lengthOf, minus, plus, scaled, unit, type Vector } from '../handling/vectors.ts';
 import type { Workbench } from '../kit.ts';
 import type { Mesh } from '../mesh.ts';
+import { across, cross, dot, length, minus, plus, times, unit, type Vector, vectorAt } from '../vectors.ts';
 import { centreOfMass, surfaceArea } from './mass.ts';
 import { overhangArea } from './overhang.ts';
 
@@ -69,19 +69,23 @@ function hullFacets({ positions, triangles }: Mesh): Facet[] {
   const groups: { normal: Vector; sum: Vector; corners: Vector[] }[] = [];
   const found: { normal: Vector; area: Vector; corners: Vector[] }[] = [];
   for (let t = 0; t < triangles.length; t += 3) {
-    const corners = [at(positions, triangles[t]!), at(positions, triangles[t + 1]!), at(positions, triangles[t + 2]!)];
-    const area = scaled(cross(minus(corners[1]!, corners[0]!), minus(corners[2]!, corners[0]!)), 0.5);
-    if (lengthOf(area) > 0) found.push({ normal: unit(area), area, corners });
+    const corners = [
+      vectorAt(positions, triangles[t]!),
+      vectorAt(positions, triangles[t + 1]!),
+      vectorAt(positions, triangles[t + 2]!),
+    ];
+    const area = times(cross(minus(corners[1]!, corners[0]!), minus(corners[2]!, corners[0]!)), 0.5);
+    if (length(area) > 0) found.push({ normal: unit(area), area, corners });
   }
-  found.sort((a, b) => lengthOf(b.area) - lengthOf(a.area));
+  found.sort((a, b) => length(b.area) - length(a.area));
   for (const { normal, area, corners } of found) {
     const group = groups.find((one) => dot(one.normal, normal) > SAME_FACE);
     if (group) {
       group.sum = plus(group.sum, area);
       group.corners.push(...corners);
-    } else if (lengthOf(area) > SEED_SHARE * lengthOf(found[0]!.area)) groups.push({ normal, sum: area, corners });
+    } else if (length(area) > SEED_SHARE * length(found[0]!.area)) groups.push({ normal, sum: area, corners });
   }
-  return groups.map(({ sum, corners }) => ({ normal: unit(sum), corners, area: lengthOf(sum) }));
+  return groups.map(({ sum, corners }) => ({ normal: unit(sum), corners, area: length(sum) }));
 }
 
 /**
@@ -112,7 +116,7 @@ function standing(facet: Facet, hull: Mesh, centre: Vector, mesh: Mesh, overhang
   const level = Math.max(...facet.corners.map((corner) => dot(corner, down)));
   const margin = marginInside(outline, [dot(centre, e), dot(centre, f)]);
   let lowest = Number.POSITIVE_INFINITY;
-  for (let v = 0; 3 * v < hull.positions.length; v++) lowest = Math.min(lowest, dot(at(hull.positions, v), down));
+  for (let v = 0; 3 * v < hull.positions.length; v++) lowest = Math.min(lowest, dot(vectorAt(hull.positions, v), down));
   const above = level - dot(centre, down);
   return {
     down,
@@ -142,7 +146,7 @@ function laidDown({ down, footprint, margin, tilt, under }: Standing, mesh: Mesh
   const turned = new Float64Array(mesh.positions.length);
   for (let v = 0; 3 * v < turned.length; v++)
     rows.forEach((row, axis) => {
-      const value = dot(row, at(mesh.positions, v));
+      const value = dot(row, vectorAt(mesh.positions, v));
       turned[3 * v + axis] = value;
       low[axis] = Math.min(low[axis]!, value);
     });

@@ -1,8 +1,8 @@
 import type { Manifold } from 'manifold-3d';
 import { hullOf } from '../handling/hull.ts';
-import { at, cross, dot, lengthOf, minus, plus, scaled, unit, type Vector } from '../handling/vectors.ts';
 import type { Workbench } from '../kit.ts';
 import { type Mesh, meshVolume } from '../mesh.ts';
+import { cross, dot, length, minus, plus, times, unit, type Vector, vectorAt } from '../vectors.ts';
 
 export const CONVEX_WIDTH = 'smallest width of a convex body';
 const RAYS = 'rays from the middles of triangles';
@@ -42,18 +42,20 @@ function smallestWidth({ positions, triangles }: Mesh): number {
   const round = positions.length > 3 * MOST_CORNERS;
   const [normals, sides]: [Vector[], Vector[]] = [[], []];
   for (let t = 0; t < triangles.length; t += 3) {
-    const [a, b, c] = [triangles[t]!, triangles[t + 1]!, triangles[t + 2]!].map((vertex) => at(positions, vertex));
+    const [a, b, c] = [triangles[t]!, triangles[t + 1]!, triangles[t + 2]!].map((vertex) =>
+      vectorAt(positions, vertex),
+    );
     const normal = cross(minus(b!, a!), minus(c!, a!));
-    if (lengthOf(normal) < SLIVER) continue;
+    if (length(normal) < SLIVER) continue;
     if (round) normals.push(normal);
     else {
       addDirection(normals, normal);
       for (const side of [minus(b!, a!), minus(c!, b!), minus(a!, c!)]) addDirection(sides, side);
     }
   }
-  const large = round ? normals.sort((a, b) => lengthOf(b) - lengthOf(a)).slice(0, MOST_CORNERS) : normals;
+  const large = round ? normals.sort((a, b) => length(b) - length(a)).slice(0, MOST_CORNERS) : normals;
   const between = sides.flatMap((one, i) => sides.slice(i + 1).map((other) => cross(one, other)));
-  return [...large, ...between.filter((one) => lengthOf(one) > PARALLEL)]
+  return [...large, ...between.filter((one) => length(one) > PARALLEL)]
     .map(unit)
     .reduce((least, direction) => Math.min(least, widthAlong(positions, direction)), Number.POSITIVE_INFINITY);
 }
@@ -70,7 +72,7 @@ function addDirection(known: Vector[], direction: Vector): void {
 function widthAlong(positions: Float64Array, direction: Vector): number {
   let [low, high] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
   for (let v = 0; 3 * v < positions.length; v++) {
-    const along = dot(at(positions, v), direction);
+    const along = dot(vectorAt(positions, v), direction);
     [low, high] = [Math.min(low, along), Math.max(high, along)];
   }
   return high - low;
@@ -87,11 +89,13 @@ function rays({ positions, triangles, surface }: Mesh, fine?: number): { from: V
   for (let place = 0; place < count; place += every) {
     const t = 3 * Math.floor(place);
     if (fine !== undefined && surface?.[t / 3] === fine) continue;
-    const [a, b, c] = [triangles[t]!, triangles[t + 1]!, triangles[t + 2]!].map((vertex) => at(positions, vertex));
+    const [a, b, c] = [triangles[t]!, triangles[t + 1]!, triangles[t + 2]!].map((vertex) =>
+      vectorAt(positions, vertex),
+    );
     const normal = cross(minus(b!, a!), minus(c!, a!));
-    const size = lengthOf(normal);
+    const size = length(normal);
     if (size < SLIVER) continue;
-    all.push({ from: scaled(plus(plus(a!, b!), c!), 1 / 3), inwards: scaled(normal, -1 / size) });
+    all.push({ from: times(plus(plus(a!, b!), c!), 1 / 3), inwards: times(normal, -1 / size) });
   }
   return all;
 }
@@ -104,5 +108,5 @@ function wayThrough(solid: Manifold, from: Vector, inwards: Vector): number {
   const start = plus(from, inwards, START);
   const [first] = solid.rayCast([...start], [...plus(from, inwards, FAR)]);
   if (!first || -dot(inwards, first.normal) > FACING) return Number.POSITIVE_INFINITY;
-  return lengthOf(minus(first.position, from));
+  return length(minus(first.position, from));
 }

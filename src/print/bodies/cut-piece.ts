@@ -3,8 +3,8 @@ import { commensurateOffsets, doubleOffset, type Offset } from '../../polyhedron
 import { loosePlanes } from '../../polyhedron/planes.ts';
 import { intersect } from '../../polyhedron/solid.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
+import { dot, type Vector, vectorAt } from '../vectors.ts';
 import { type FacePolygon, faceMesh } from './face-mesh.ts';
-import { dot, type Vector, vectorAt } from './vector.ts';
 
 /** A half-space `normal · x ≤ distance`: Cartesian unit normal, millimetres. */
 export interface Cut {

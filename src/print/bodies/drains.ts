@@ -3,13 +3,13 @@ import { ObjectError } from '../../shape/object-error.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
 import type { Workbench } from '../kit.ts';
 import { boreOutline } from '../rods/solid.ts';
+import { dot, type Vector, vectorAt } from '../vectors.ts';
 import { mm, mmAtMost } from './body-parts.ts';
 import { largestDisc } from './convex-polygon.ts';
 import type { Piece } from './cut-piece.ts';
 import { frameAlong } from './place.ts';
 import { faceName } from './resting.ts';
 import { flatFace, inSpace } from './sites.ts';
-import { dot, type Vector, vectorAt } from './vector.ts';
 
 /** A round hole square through one wall. */
 export interface Drain {

@@ -6,6 +6,7 @@ import type { Workbench } from '../kit.ts';
 import type { Mesh } from '../mesh.ts';
 import type { Part } from '../part.ts';
 import { ROD_COLOUR } from '../surfaces.ts';
+import { vectorAt } from '../vectors.ts';
 import { type BodyParts, mm } from './body-parts.ts';
 import { largestDisc } from './convex-polygon.ts';
 import { largestInset } from './hollow.ts';
@@ -15,7 +16,6 @@ import { flatFace } from './sites.ts';
 import { crystalSkeleton, isHeld, stayTips } from './skeleton.ts';
 import { firstSound, type IsSound } from './sound.ts';
 import { ball, balls, strut, struts, throughRods } from './struts.ts';
-import { vectorAt } from './vector.ts';
 
 /** Diameters in millimetres. */
 export interface FramePlan {

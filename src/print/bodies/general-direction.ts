@@ -1,6 +1,6 @@
 import { ObjectError } from '../../shape/object-error.ts';
+import { apart, type Vector } from '../vectors.ts';
 import { type Turn, turned } from './operations.ts';
-import { apart, type Vector } from './vector.ts';
 
 /** Directions tried; enough to come within a few degrees of the best. */
 const TRIES = 500;

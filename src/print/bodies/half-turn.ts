@@ -1,4 +1,4 @@
-import { dot, minus, plus, times, type Vector } from './vector.ts';
+import { dot, minus, plus, times, type Vector } from '../vectors.ts';
 
 /** Points nearer than this share of the whole count as one. */
 const SAME = 1e-6;

@@ -1,6 +1,7 @@
 import type { FacePlane } from '../../shape/face-planes.ts';
 import { ObjectError } from '../../shape/object-error.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
+import { times, type Vector } from '../vectors.ts';
 import { mm, mmAtMost } from './body-parts.ts';
 import type { Point } from './convex-polygon.ts';
 import type { Piece } from './cut-piece.ts';
@@ -9,7 +10,6 @@ import type { HalvesPlan } from './halves.ts';
 import { pocketEnd } from './magnets.ts';
 import { holeDepth } from './pins.ts';
 import { type FlatFace, flatFace, inSpace, roomForHole, spread } from './sites.ts';
-import { times, type Vector } from './vector.ts';
 
 /** Where two halves are joined: points of the cut. */
 export interface JoinSites {

@@ -5,13 +5,13 @@ import type { ClosedShape } from '../../shape/shape.ts';
 import type { Workbench } from '../kit.ts';
 import type { Part } from '../part.ts';
 import { crystalSurfaces } from '../surfaces.ts';
+import { times, type Vector } from '../vectors.ts';
 import { type BodyParts, mm } from './body-parts.ts';
 import { type Cut, cutPiece, type Piece, pieceMesh } from './cut-piece.ts';
 import { joinSites } from './halves-sites.ts';
 import { lieOn } from './lie.ts';
 import { type MagnetPlan, magnetWarning, pauseRemark, pocketTool, refuseThinCover } from './magnets.ts';
 import { holeTool, type PinPlan, pinPart } from './pins.ts';
-import { times, type Vector } from './vector.ts';
 
 /** All lengths in millimetres. */
 export interface HalvesPlan {

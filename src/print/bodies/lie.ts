@@ -1,6 +1,6 @@
 import type { Mesh } from '../mesh.ts';
 import { ontoBed } from '../part.ts';
-import { across, dot, type Vector, vectorAt } from './vector.ts';
+import { across, dot, type Vector, vectorAt } from '../vectors.ts';
 
 /** The mesh turned so that a direction points down, and moved to the corner of the bed. */
 export function lieOn(mesh: Mesh, down: Vector): Mesh {

@@ -2,9 +2,9 @@ import type { Manifold } from 'manifold-3d';
 import { ObjectError } from '../../shape/object-error.ts';
 import type { Workbench } from '../kit.ts';
 import { boreOutline } from '../rods/solid.ts';
+import type { Vector } from '../vectors.ts';
 import { mm } from './body-parts.ts';
 import { frameAlong } from './place.ts';
-import type { Vector } from './vector.ts';
 
 /** Disc magnets in closed pockets; millimetres. */
 export interface MagnetPlan {

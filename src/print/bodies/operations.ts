@@ -1,6 +1,6 @@
 import type { Mat4 } from 'manifold-3d';
 import type { Crystal } from '../../recipe/crystal.ts';
-import { dot, type Vector } from './vector.ts';
+import { dot, type Vector } from '../vectors.ts';
 
 /** A symmetry operation in the Cartesian frame, rows first. */
 export type Turn = readonly [Vector, Vector, Vector];

@@ -5,8 +5,8 @@ import type { Mesh } from '../mesh.ts';
 import { ontoBed, type Part } from '../part.ts';
 import { boreOutline, rodOutline } from '../rods/solid.ts';
 import { ROD_COLOUR } from '../surfaces.ts';
+import type { Vector } from '../vectors.ts';
 import { frameAlong } from './place.ts';
-import type { Vector } from './vector.ts';
 
 /** A printed pin that holds two parts together, half in each; millimetres. */
 export interface PinPlan {

@@ -1,5 +1,5 @@
 import type { Mat4 } from 'manifold-3d';
-import { across, type Vector } from './vector.ts';
+import { across, type Vector } from '../vectors.ts';
 
 /** Takes the upright z axis to a direction, the origin to a point. */
 export function frameAlong(axis: Vector, at: Vector): Mat4 {

@@ -1,7 +1,7 @@
 import { printFace } from '../../crystal/indices.ts';
 import { miller } from '../../crystal/spaces.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
-import { unit, type Vector, vectorAt } from './vector.ts';
+import { unit, type Vector, vectorAt } from '../vectors.ts';
 
 /** What lies on the bed: a plane number of the solid, or a Cartesian direction that points down. */
 export type Resting = number | Vector;

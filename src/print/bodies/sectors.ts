@@ -4,6 +4,7 @@ import type { Workbench } from '../kit.ts';
 import type { Mesh } from '../mesh.ts';
 import type { Part } from '../part.ts';
 import { crystalSurfaces } from '../surfaces.ts';
+import { minus, times, unit, vectorAt } from '../vectors.ts';
 import { type BodyParts, mm } from './body-parts.ts';
 import { type Cut, cutPiece, insetPiece, type Piece, pieceMesh } from './cut-piece.ts';
 import { faceMesh } from './face-mesh.ts';
@@ -11,7 +12,6 @@ import { lieOn } from './lie.ts';
 import { faceName } from './resting.ts';
 import { isSimple, sectorGroups } from './sector-groups.ts';
 import { firstSound, type IsSound } from './sound.ts';
-import { minus, times, unit, vectorAt } from './vector.ts';
 
 export interface SectorsPlan {
   /** A piece for each face, or for all faces of a form that hang together. */

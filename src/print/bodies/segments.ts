@@ -1,4 +1,4 @@
-import { dot, length, minus, plus, times, type Vector } from './vector.ts';
+import { dot, length, minus, plus, times, type Vector } from '../vectors.ts';
 
 const within = (t: number): number => Math.min(1, Math.max(0, t));
 

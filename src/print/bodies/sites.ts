@@ -1,6 +1,6 @@
 import type { FacePlane } from '../../shape/face-planes.ts';
+import { across, cross, dot, length, plus, times, type Vector, vectorAt } from '../vectors.ts';
 import { area, clip, type Disc, largestDisc, longestExtent, type Point } from './convex-polygon.ts';
-import { across, cross, dot, length, plus, times, type Vector, vectorAt } from './vector.ts';
 
 /** A flat face in its own plane: `origin + s·u + t·v`, u and v unit vectors, counter-clockwise seen along −normal. */
 export interface FlatFace {

@@ -1,7 +1,7 @@
 import { edges } from '../../polyhedron/measures.ts';
 import type { RodPlan } from '../../rods/plan.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
-import { dot, length, minus, plus, times, unit, type Vector, vectorAt } from './vector.ts';
+import { dot, length, minus, plus, times, unit, type Vector, vectorAt } from '../vectors.ts';
 
 /** Corners and edges of a crystal at its size, millimetres. */
 export interface Skeleton {

@@ -3,10 +3,10 @@ import type { RodPlan } from '../../rods/plan.ts';
 import type { Workbench } from '../kit.ts';
 import type { Mesh } from '../mesh.ts';
 import { rodOutline, terminal, toEnd } from '../rods/solid.ts';
+import { apart, length, minus, times, unit, type Vector } from '../vectors.ts';
 import { faceMesh } from './face-mesh.ts';
 import { frameAlong } from './place.ts';
 import type { Skeleton } from './skeleton.ts';
-import { apart, length, minus, times, unit, type Vector } from './vector.ts';
 
 /** Bodies of a frame belong to its first surface. */
 const FRAME = 0;

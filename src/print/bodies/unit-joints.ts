@@ -1,12 +1,12 @@
 import type { FacePlane } from '../../shape/face-planes.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
+import { apart, plus, times, type Vector } from '../vectors.ts';
 import { largestDisc, type Point } from './convex-polygon.ts';
 import type { Cut, Piece } from './cut-piece.ts';
 import { type Turn, turned } from './operations.ts';
 import { holeDepth, type PinPlan } from './pins.ts';
 import { segmentDistance } from './segments.ts';
 import { flatFace, inSpace, roomForHole, spread } from './sites.ts';
-import { apart, plus, times, type Vector } from './vector.ts';
 
 /** How the first piece is pinned to the neighbour that an operation makes of it, and to the one its inverse makes. */
 export interface Joint {

@@ -4,6 +4,7 @@ import type { ClosedShape } from '../../shape/shape.ts';
 import type { Workbench } from '../kit.ts';
 import type { Mesh } from '../mesh.ts';
 import type { Part, Surface } from '../part.ts';
+import { minus, unit, type Vector, vectorAt } from '../vectors.ts';
 import { type BodyParts, mm } from './body-parts.ts';
 import { area } from './convex-polygon.ts';
 import { type Cut, cutPiece, type Piece, pieceMesh } from './cut-piece.ts';
@@ -13,7 +14,6 @@ import { asMat4, cartesianTurns, type Turn, turned } from './operations.ts';
 import { holeTool, type PinPlan, pinPart } from './pins.ts';
 import { flatFace } from './sites.ts';
 import { chainOf, type Joint, jointsOf, type Link } from './unit-joints.ts';
-import { minus, unit, type Vector, vectorAt } from './vector.ts';
 
 /** All lengths in millimetres. */
 export interface UnitsPlan {

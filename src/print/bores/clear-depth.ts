@@ -18,12 +18,3 @@ export function clearDepth(neighbours: readonly Neighbour[], radius: number, wal
     return Math.max(depth, (radius + wall + radius * Math.cos(acute)) / Math.sin(acute));
   }, 0);
 }
-
-type Vector = readonly [number, number, number];
-
-/** Angle between two unit vectors, radians. */
-export const angleBetween = (a: Vector, b: Vector): number =>
-  Math.atan2(
-    Math.hypot(a[1] * b[2] - a[2] * b[1], a[2] * b[0] - a[0] * b[2], a[0] * b[1] - a[1] * b[0]),
-    a[0] * b[0] + a[1] * b[1] + a[2] * b[2],
-  );

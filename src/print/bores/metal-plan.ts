@@ -4,7 +4,8 @@ import { type FacePlane, facePlanes } from '../../shape/face-planes.ts';
 import { ObjectError } from '../../shape/object-error.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
 import { boreOutline } from '../rods/solid.ts';
-import { angleBetween, clearDepth } from './clear-depth.ts';
+import { angleBetween } from '../vectors.ts';
+import { clearDepth } from './clear-depth.ts';
 import { type Mouth, mouthOf } from './mouth.ts';
 
 /** Bores for bought metal rod. Lengths in millimetres. */

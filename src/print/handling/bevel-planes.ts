@@ -1,7 +1,7 @@
 import { edges } from '../../polyhedron/measures.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
+import { dot, plus, unit, type Vector, vectorAt } from '../vectors.ts';
 import { cornerAxes } from './corner-axis.ts';
-import { at, dot, plus, unit, type Vector } from './vectors.ts';
 
 /** A plane that cuts an edge or a corner off: `normal · x ≤ distance`, millimetres, unit normal. */
 export interface BevelPlane {
@@ -31,15 +31,15 @@ export function bevelPlanes(shape: ClosedShape, scale: number, { width }: { read
   };
   for (let face = 0; face + 1 < solid.start.length; face++)
     for (let edge = solid.start[face]!; edge < solid.start[face + 1]!; edge++)
-      deepen(solid.corner[edge]!, at(normals, face), 0);
+      deepen(solid.corner[edge]!, vectorAt(normals, face), 0);
   const strips = edges(solid, measures).map(({ faces, vertices, dihedral }): BevelPlane => {
-    const normal = unit(plus(at(normals, faces[0]), at(normals, faces[1])));
+    const normal = unit(plus(vectorAt(normals, faces[0]), vectorAt(normals, faces[1])));
     const cut = width / (2 * Math.tan((dihedral * Math.PI) / 360));
     for (const vertex of vertices) deepen(vertex, normal, cut);
-    return { cuts: 'edge', normal, distance: scale * dot(normal, at(positions, vertices[0])) - cut };
+    return { cuts: 'edge', normal, distance: scale * dot(normal, vectorAt(positions, vertices[0])) - cut };
   });
   const facets = axes.map((normal, vertex): BevelPlane => {
-    const distance = scale * dot(normal, at(positions, vertex)) - ASIDE * depth[vertex]!;
+    const distance = scale * dot(normal, vectorAt(positions, vertex)) - ASIDE * depth[vertex]!;
     return { cuts: 'corner', normal, distance };
   });
   return [...strips, ...facets];

@@ -1,4 +1,4 @@
-import { angleBetween, plus, scaled, unit, type Vector } from './vectors.ts';
+import { angleBetween, plus, times, unit, type Vector } from '../vectors.ts';
 
 /** Points on a unit sphere, and triangles between them, counter-clockwise seen from outside. */
 export interface Cap {
@@ -46,7 +46,7 @@ export function sphereCap(arcs: readonly (readonly Vector[])[], step: number): C
 export function between(from: Vector, to: Vector, share: number): Vector {
   const angle = angleBetween(from, to);
   if (angle === 0 || share === 0) return from;
-  return unit(plus(scaled(from, Math.sin((1 - share) * angle)), to, Math.sin(share * angle)));
+  return unit(plus(times(from, Math.sin((1 - share) * angle)), to, Math.sin(share * angle)));
 }
 
 /** Arcs are evenly divided great arcs, so a share of the arc is a share of its angle. */

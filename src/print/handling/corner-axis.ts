@@ -1,4 +1,4 @@
-import { at, lengthOf, minus, plus, scaled, unit, type Vector } from './vectors.ts';
+import { length, minus, plus, times, unit, type Vector, vectorAt } from '../vectors.ts';
 
 /**
  * For each corner of a convex solid the direction in which it points: the sum of its faces' normals, each weighted by
@@ -16,8 +16,8 @@ export function cornerAxes(
       const vertex = corner[edge]!;
       const before = corner[edge === from ? to - 1 : edge - 1]!;
       const after = corner[edge + 1 === to ? from : edge + 1]!;
-      const angle = opening(at(positions, before), at(positions, vertex), at(positions, after));
-      sums[vertex] = plus(sums[vertex]!, at(normals, face), angle);
+      const angle = opening(vectorAt(positions, before), vectorAt(positions, vertex), vectorAt(positions, after));
+      sums[vertex] = plus(sums[vertex]!, vectorAt(normals, face), angle);
     }
   }
   return sums.map(unit);
@@ -25,6 +25,6 @@ export function cornerAxes(
 
 function opening(before: Vector, vertex: Vector, after: Vector): number {
   const [a, b] = [minus(before, vertex), minus(after, vertex)];
-  const [p, q] = [scaled(a, lengthOf(b)), scaled(b, lengthOf(a))];
-  return 2 * Math.atan2(lengthOf(minus(p, q)), lengthOf(plus(p, q)));
+  const [p, q] = [times(a, length(b)), times(b, length(a))];
+  return 2 * Math.atan2(length(minus(p, q)), length(plus(p, q)));
 }

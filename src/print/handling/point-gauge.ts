@@ -1,7 +1,7 @@
 import type { Mesh } from '../mesh.ts';
+import { across, dot, minus, plus, type Vector, vectorAt } from '../vectors.ts';
 import { POINT_GAUGE } from './figures.ts';
 import { fitRectangle, type Point } from './rectangle-fit.ts';
-import { across, at, dot, minus, plus, type Vector } from './vectors.ts';
 
 /** Millimetres; a point that reaches deeper is told as reaching this far. */
 export const GAUGE_LIMIT = 3;
@@ -59,7 +59,7 @@ function ridges({ positions, triangles }: Mesh): Ridges {
     const to = triangles[i % 3 === 2 ? i - 2 : i + 1]!;
     if (from < to) pairs.push([from, to]);
   });
-  return { points: Array.from({ length: positions.length / 3 }, (_, i) => at(positions, i)), pairs };
+  return { points: Array.from({ length: positions.length / 3 }, (_, i) => vectorAt(positions, i)), pairs };
 }
 
 /**

@@ -6,9 +6,9 @@ import type { ClosedShape } from '../../shape/shape.ts';
 import type { Mesh } from '../mesh.ts';
 import { withoutShortEdges } from '../short-edges.ts';
 import { crystalSurfaces } from '../surfaces.ts';
+import { angleBetween, plus, type Vector, vectorAt } from '../vectors.ts';
 import { BLUNTED, type BluntBody, lostFaces } from './bevelled.ts';
 import { between, sphereCap } from './cap.ts';
-import { angleBetween, at, plus, type Vector } from './vectors.ts';
 
 /**
  * Millimetres; taken when rounding is asked for without a radius. Such a corner reaches 0.20 mm into the point gauge.
@@ -117,11 +117,12 @@ class RoundedBuilder {
   corners(): void {
     const { positions, measures } = this.inner;
     this.facesAround().forEach((faces, vertex) => {
-      const normals = faces.map((face) => at(measures.normals, face));
+      const normals = faces.map((face) => vectorAt(measures.normals, face));
       const arcs = normals.map((normal, i) => this.arc(normal, normals[(i + 1) % normals.length]!));
       const { directions, triangles } = sphereCap(arcs, this.step);
       const first = this.points.length / 3;
-      for (const direction of directions) this.points.push(...plus(at(positions, vertex), direction, this.radius));
+      for (const direction of directions)
+        this.points.push(...plus(vectorAt(positions, vertex), direction, this.radius));
       for (const point of triangles) this.triangles.push(first + point);
       const rim = arcs.flat().length;
       let place = 0;

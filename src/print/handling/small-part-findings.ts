@@ -1,12 +1,12 @@
 import type { Workbench } from '../kit.ts';
 import type { Mesh } from '../mesh.ts';
 import type { Part } from '../part.ts';
+import { cross, dot, length, minus, type Vector, vectorAt } from '../vectors.ts';
 import { SMALL_PARTS } from './figures.ts';
 import type { Finding } from './finding.ts';
 import { hullOf } from './hull.ts';
 import { piecesOf } from './pieces.ts';
 import { longestLine, type SmallPartVerdict, smallPart } from './small-parts.ts';
-import { at, cross, dot, lengthOf, minus, type Vector } from './vectors.ts';
 
 /** Every connected solid of every part in the small-parts cylinder; copies of a part are tried once. */
 export function smallPartFindings(bench: Workbench, parts: readonly Part[]): Finding<'small-part'>[] {
@@ -56,9 +56,9 @@ function inscribedRadius({ positions, triangles }: Mesh): number {
   const centre = [middle[0]!, middle[1]!, middle[2]!] as const;
   let least = Number.POSITIVE_INFINITY;
   for (let t = 0; t < triangles.length; t += 3) {
-    const [a, b, c] = [triangles[t]!, triangles[t + 1]!, triangles[t + 2]!].map((v) => at(positions, v));
+    const [a, b, c] = [triangles[t]!, triangles[t + 1]!, triangles[t + 2]!].map((v) => vectorAt(positions, v));
     const normal = cross(minus(b!, a!), minus(c!, a!));
-    const size = lengthOf(normal);
+    const size = length(normal);
     if (size > SLIVER) least = Math.min(least, dot(normal, minus(a!, centre)) / size);
   }
   return least - 0.01;
@@ -68,4 +68,4 @@ function inscribedRadius({ positions, triangles }: Mesh): number {
 const SLIVER = 1e-4;
 
 const pointsOf = ({ positions }: Mesh): Vector[] =>
-  Array.from({ length: positions.length / 3 }, (_, i) => at(positions, i));
+  Array.from({ length: positions.length / 3 }, (_, i) => vectorAt(positions, i));

@@ -1,6 +1,6 @@
+import { across, angleBetween, dot, length, minus, plus, unit, type Vector, vectorAt } from '../vectors.ts';
 import { leastMeeting } from './disc-meet.ts';
 import { SMALL_PARTS } from './figures.ts';
-import { across, angleBetween, at, dot, lengthOf, minus, plus, unit, type Vector } from './vectors.ts';
 
 /** How a piece lies in the gauge, in its own coordinates: the way out of the cylinder, and to its deep side. */
 export interface Lie {
@@ -72,7 +72,7 @@ interface Piece {
  * point).
  */
 function centred(positions: Float64Array): Piece {
-  const points = Array.from({ length: positions.length / 3 }, (_, i) => at(positions, i));
+  const points = Array.from({ length: positions.length / 3 }, (_, i) => vectorAt(positions, i));
   let middle = points[0]!;
   const farthestFrom = (from: Vector): Vector => {
     let [far, most] = [from, 0];
@@ -90,7 +90,7 @@ function centred(positions: Float64Array): Piece {
   return { points: moved, radius: distance(farthestFrom(middle), middle) };
 }
 
-const distance = (a: Vector, b: Vector): number => lengthOf(minus(a, b));
+const distance = (a: Vector, b: Vector): number => length(minus(a, b));
 
 /** The largest distance between two of the points. */
 export function longestLine(points: readonly Vector[]): number {

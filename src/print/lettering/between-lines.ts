@@ -1,4 +1,5 @@
-import { dot, type Field, type Point, type Vector } from './field.ts';
+import { dot, type Vector } from '../vectors.ts';
+import type { Field, Point } from './field.ts';
 
 /** A strip on the surface, about a plane through the crystal's centre, that letters must stay off. Millimetres. */
 export interface SurfaceLine {

@@ -1,8 +1,9 @@
 import { faceCorners } from '../../polyhedron/measures.ts';
 import type { FacePlane } from '../../shape/face-planes.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
+import { dot, type Vector, vectorAt } from '../vectors.ts';
 import type { Disc, Side } from './box-room.ts';
-import { dot, type Field, onField, type Point, type Vector, vectorAt } from './field.ts';
+import { type Field, onField, type Point } from './field.ts';
 import { sidesOf } from './fit-box.ts';
 import { ROOT } from './solids.ts';
 import type { LetterStyle } from './style.ts';

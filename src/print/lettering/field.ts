@@ -1,6 +1,6 @@
 import type { Mat4 } from 'manifold-3d';
+import { cross, dot, times, unit, type Vector } from '../vectors.ts';
 
-export type Vector = readonly [number, number, number];
 export type Point = readonly [number, number];
 
 /** A plane with the directions that text on it takes: `right × up = normal`, so that it reads from outside. */
@@ -23,7 +23,7 @@ export function fieldOf(normal: Vector, distance: number): Field {
   const towards: Vector = Math.hypot(normal[0], normal[1]) < LEVEL ? [0, 1, 0] : [0, 0, 1];
   const part = dot(towards, normal);
   const up = unit([towards[0] - part * normal[0], towards[1] - part * normal[1], towards[2] - part * normal[2]]);
-  return { origin: scaled(normal, distance), right: cross(up, normal), up, normal };
+  return { origin: times(normal, distance), right: cross(up, normal), up, normal };
 }
 
 /** The same field with text that runs upwards instead of to the right. */
@@ -31,7 +31,7 @@ export const quarterTurn = ({ origin, right, up, normal }: Field): Field => ({
   origin,
   normal,
   right: up,
-  up: scaled(right, -1),
+  up: times(right, -1),
 });
 
 export const onField = ({ origin, right, up }: Field, point: Vector): Point => {
@@ -51,18 +51,4 @@ export const toField = ({ origin: [x, y, z], right, up, normal }: Field): Mat4 =
   y,
   z,
   1,
-];
-
-export const dot = (a: Vector, b: Vector): number => a[0] * b[0] + a[1] * b[1] + a[2] * b[2];
-export const scaled = (a: Vector, by: number): Vector => [a[0] * by, a[1] * by, a[2] * by];
-export const cross = (a: Vector, b: Vector): Vector => [
-  a[1] * b[2] - a[2] * b[1],
-  a[2] * b[0] - a[0] * b[2],
-  a[0] * b[1] - a[1] * b[0],
-];
-export const unit = (v: Vector): Vector => scaled(v, 1 / Math.hypot(...v));
-export const vectorAt = (values: ArrayLike<number>, index: number): Vector => [
-  values[3 * index]!,
-  values[3 * index + 1]!,
-  values[3 * index + 2]!,
 ];

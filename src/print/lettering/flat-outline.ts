@@ -1,7 +1,8 @@
 import type { Manifold } from 'manifold-3d';
 import type { FacePlane } from '../../shape/face-planes.ts';
 import { ObjectError } from '../../shape/object-error.ts';
-import { dot, type Field, onField, type Point, type Vector } from './field.ts';
+import { dot, type Vector } from '../vectors.ts';
+import { type Field, onField, type Point } from './field.ts';
 
 /** A vertex this near to the plane lies in it, millimetres: the boolean library rounds to a tenth of that. */
 const IN_PLANE = 1e-3;

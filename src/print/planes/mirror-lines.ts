@@ -9,9 +9,9 @@ import { mm, mmAtMost } from '../bodies/body-parts.ts';
 import { insetPiece, type Piece, pieceMesh } from '../bodies/cut-piece.ts';
 import { largestInset } from '../bodies/hollow.ts';
 import { frameAlong } from '../bodies/place.ts';
-import type { Vector } from '../bodies/vector.ts';
 import type { Workbench } from '../kit.ts';
 import { common, OVERSHOOT, ROOT } from '../lettering/solids.ts';
+import type { Vector } from '../vectors.ts';
 import { mirrorRemarks } from './mirror-remarks.ts';
 
 /** How mirror planes are shown on the surface. Lengths in millimetres. */

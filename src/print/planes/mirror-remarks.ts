@@ -2,7 +2,7 @@ import { faceCorners } from '../../polyhedron/measures.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
 import { mm } from '../bodies/body-parts.ts';
 import { faceName } from '../bodies/resting.ts';
-import { dot, vectorAt } from '../bodies/vector.ts';
+import { dot, vectorAt } from '../vectors.ts';
 import type { MirrorLine, MirrorLinesPlan } from './mirror-lines.ts';
 
 const RELIEF = { engraved: 'engraved', raised: 'raised', inlaid: 'inlaid as strips in a colour of their own,' };

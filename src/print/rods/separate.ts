@@ -4,10 +4,11 @@ import type { AxisEnd } from '../../rods/axis-ends.ts';
 import { axisWords } from '../../rods/axis-words.ts';
 import { COLLAR, GAP, type RodEnd, type RodPlan } from '../../rods/plan.ts';
 import { ObjectError } from '../../shape/object-error.ts';
-import { angleBetween, clearDepth } from '../bores/clear-depth.ts';
+import { clearDepth } from '../bores/clear-depth.ts';
 import type { Workbench } from '../kit.ts';
 import { ontoBed, type Part } from '../part.ts';
 import { ROD_COLOUR } from '../surfaces.ts';
+import { angleBetween } from '../vectors.ts';
 import { boreOutline, HOLLOW_DEPTH, rodOutline, terminal, toEnd } from './solid.ts';
 
 /** Plastic left between two bores that meet near the centre, millimetres. */

@@ -2,7 +2,7 @@ import { faceCorners } from '../../polyhedron/measures.ts';
 import { facePlanes } from '../../shape/face-planes.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
 import { insetPiece, type Piece } from '../bodies/cut-piece.ts';
-import { times, vectorAt } from '../bodies/vector.ts';
+import { times, vectorAt } from '../vectors.ts';
 import { CornerPool } from './corner-pool.ts';
 import { skinWalls } from './walls.ts';
 

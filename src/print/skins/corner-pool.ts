@@ -1,4 +1,4 @@
-import type { Vector } from '../bodies/vector.ts';
+import type { Vector } from '../vectors.ts';
 
 /** Corners closer than this, millimetres, are one: a file in single precision could not keep them apart. */
 const ONE_CORNER = 1e-4;

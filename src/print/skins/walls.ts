@@ -1,5 +1,5 @@
 import type { FacePlane } from '../../shape/face-planes.ts';
-import { across, dot, minus, plus, times, type Vector } from '../bodies/vector.ts';
+import { across, dot, minus, plus, times, type Vector } from '../vectors.ts';
 
 type Point = readonly [number, number];
 

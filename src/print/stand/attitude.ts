@@ -1,4 +1,4 @@
-import { cross, dot, scaled, unit, type Vector } from '../lettering/field.ts';
+import { cross, dot, times, unit, type Vector } from '../vectors.ts';
 
 /** How a crystal stands: c upright, or resting on a face whose outward normal (crystal's frame) then points down. */
 export type Attitude = 'c-up' | { readonly down: Vector };
@@ -14,7 +14,7 @@ export interface Stance {
 export function stanceOf(attitude: Attitude): Stance {
   const upright: Stance = { right: [0, 1, 0], away: [-1, 0, 0], up: [0, 0, 1] };
   if (attitude === 'c-up') return upright;
-  const up = scaled(unit(attitude.down), -1);
+  const up = times(unit(attitude.down), -1);
   const turn = (v: Vector): Vector => shortestTurn(upright.up, up, v);
   return { right: turn(upright.right), away: turn(upright.away), up };
 }

@@ -4,8 +4,8 @@ import { loosePlanes } from '../../polyhedron/planes.ts';
 import { intersect } from '../../polyhedron/solid.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
 import { crystalMesh } from '../body.ts';
-import { dot, type Vector, vectorAt } from '../lettering/field.ts';
 import type { Mesh } from '../mesh.ts';
+import { dot, type Vector, vectorAt } from '../vectors.ts';
 
 /** Sine below which a face counts as upright, far below any angle between lattice planes in use. */
 const UPRIGHT = 1e-9;

@@ -2,8 +2,8 @@ import type { Manifold } from 'manifold-3d';
 import { AXIS_SYMBOLS } from '../../rods/axis-symbol.ts';
 import type { RodPlan } from '../../rods/plan.ts';
 import type { Workbench } from '../kit.ts';
-import { cross, scaled, unit, type Vector } from '../lettering/field.ts';
 import { hullOf } from '../lettering/solids.ts';
+import { cross, times, unit, type Vector } from '../vectors.ts';
 
 /** A round bar from one point to another in the crystal's frame, millimetres. */
 export interface RodLine {
@@ -15,8 +15,8 @@ export interface RodLine {
 /** Rods as bars: the shafts, and the circles about the symbols at their ends. */
 export function rodLines({ ends, diameter, symbolUnit }: RodPlan): RodLine[] {
   return ends.flat().flatMap(({ line, end: { along }, base, tip }) => [
-    { from: [0, 0, 0] as const, to: scaled(along, base), radius: diameter / 2 },
-    { from: scaled(along, base), to: scaled(along, tip), radius: symbolUnit * AXIS_SYMBOLS[line.symbol].radius },
+    { from: [0, 0, 0] as const, to: times(along, base), radius: diameter / 2 },
+    { from: times(along, base), to: times(along, tip), radius: symbolUnit * AXIS_SYMBOLS[line.symbol].radius },
   ]);
 }
 
@@ -41,7 +41,7 @@ export function rodSlot(
   });
   const upright = bench.prism([ring], -clearance, length + clearance);
   const bar = bench.place(upright, [...aside, 0, ...across, 0, ...along, 0, ...from, 1]);
-  const [x, y, z] = scaled(up, lift);
+  const [x, y, z] = times(up, lift);
   const raised = bench.place(bar, [1, 0, 0, 0, 0, 1, 0, 0, 0, 0, 1, 0, x, y, z, 1]);
   return hullOf(bench, bench.union([bar, raised]));
 }

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { between, sphereCap } from '../../../src/print/handling/cap.ts';
-import { angleBetween, cross, dot, type Vector } from '../../../src/print/handling/vectors.ts';
+import { angleBetween, cross, dot, type Vector } from '../../../src/print/vectors.ts';
 
 /** Solid angle of a triangle of directions, negative when it is turned inside out (Van Oosterom and Strackee 1983). */
 const solidAngle = (a: Vector, b: Vector, c: Vector): number =>

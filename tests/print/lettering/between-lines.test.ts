@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { betweenLines } from '../../../src/print/lettering/between-lines.ts';
-import { dot, fieldOf, type Point, scaled, unit, type Vector } from '../../../src/print/lettering/field.ts';
+import { fieldOf, type Point } from '../../../src/print/lettering/field.ts';
+import { dot, times, unit, type Vector } from '../../../src/print/vectors.ts';
 
 const area = (polygon: readonly Point[]): number =>
   polygon.reduce((sum, [x, y], i) => {
@@ -11,7 +12,7 @@ const area = (polygon: readonly Point[]): number =>
 
 const FIELD = fieldOf(unit([1, 2, 3]), 10);
 const plus = (a: Vector, b: Vector): Vector => [a[0] + b[0], a[1] + b[1], a[2] + b[2]];
-const inSpace = ([x, y]: Point): Vector => plus(plus(FIELD.origin, scaled(FIELD.right, x)), scaled(FIELD.up, y));
+const inSpace = ([x, y]: Point): Vector => plus(plus(FIELD.origin, times(FIELD.right, x)), times(FIELD.up, y));
 
 const polygon = fc
   .tuple(

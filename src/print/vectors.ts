@@ -7,7 +7,12 @@ export const cross = (a: Vector, b: Vector): Vector => [
   a[0] * b[1] - a[1] * b[0],
 ];
 export const times = (a: Vector, factor: number): Vector => [a[0] * factor, a[1] * factor, a[2] * factor];
-export const plus = (a: Vector, b: Vector): Vector => [a[0] + b[0], a[1] + b[1], a[2] + b[2]];
+/** `a + factor · b` */
+export const plus = (a: Vector, b: Vector, factor = 1): Vector => [
+  a[0] + factor * b[0],
+  a[1] + factor * b[1],
+  a[2] + factor * b[2],
+];
 export const minus = (a: Vector, b: Vector): Vector => [a[0] - b[0], a[1] - b[1], a[2] - b[2]];
 export const length = (a: Vector): number => Math.hypot(a[0], a[1], a[2]);
 export const unit = (a: Vector): Vector => times(a, 1 / length(a));
@@ -26,3 +31,6 @@ export function across(normal: Vector): readonly [Vector, Vector] {
   const first = unit(minus(u, times(normal, dot(u, normal))));
   return [first, cross(normal, first)];
 }
+
+/** Angle between two unit vectors, radians; exact for small angles too. */
+export const angleBetween = (a: Vector, b: Vector): number => Math.atan2(length(cross(a, b)), dot(a, b));
