@@ -1,7 +1,7 @@
 import { glbFile, isSound, type MadeFile, pngFile, stlFiles, threeMfFile } from './model-files.ts';
 import type { ModelFinding } from './print/examined.ts';
-import { extentsOf } from './print/mesh.ts';
-import { assemble, type Part } from './print/part.ts';
+import { extentsOf, type Mesh } from './print/mesh.ts';
+import { assemble, ontoBed, type Part } from './print/part.ts';
 import { printedParts } from './print/parts.ts';
 import type { Supplies } from './print/tools.ts';
 import type { Resolved } from './recipe/crystal.ts';
@@ -68,7 +68,7 @@ async function makeOne(resolved: Resolved, supplies: ModelSupplies): Promise<Mad
   const shape = closedOrThrow(polyhedron(resolved.crystal));
   const { print } = resolved;
   const scale = millimetresPerUnit(shape, print.size ?? USUAL_SIZE);
-  const printed = await printedParts(shape, scale, print, { ...supplies, isSound });
+  const printed = await printedParts(shape, scale, print, { ...supplies, isSound: isSoundOnBed });
   const { remarks, warnings } = printed;
   const examining = print.flat || print.checks ? await import('./print/examined.ts') : null;
   const parts = print.flat && examining ? await examining.laidFlat(printed.parts, print) : printed.parts;
@@ -97,6 +97,9 @@ async function makeOne(resolved: Resolved, supplies: ModelSupplies): Promise<Mad
     findings,
   };
 }
+
+/** Files take parts to the bed first, and single precision rounds otherwise there. */
+const isSoundOnBed = (mesh: Mesh): boolean => isSound(mesh) && isSound(ontoBed([mesh])[0]!);
 
 /** The size limit holds for the whole model, rods included. */
 function refuseGiants(parts: readonly Part[]): void {

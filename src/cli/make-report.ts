@@ -8,7 +8,7 @@ import type { Resolved } from '../recipe/crystal.ts';
 import { shownForms, vanishesAt } from '../shape/presence.ts';
 
 /** What was made, as words and as data. */
-export function makeReport({ crystal }: Resolved, made: Made, folder: string) {
+export function makeReport({ crystal, print }: Resolved, made: Made, folder: string) {
   const { measures, solid } = made.shape;
   const scale = made.millimetresPerUnit;
   const extents = [0, 1, 2].map((axis) => round((measures.high[axis]! - measures.low[axis]!) * scale, 2));
@@ -34,7 +34,8 @@ export function makeReport({ crystal }: Resolved, made: Made, folder: string) {
     .map(({ letter, symbol, name }) => `${letter ? `${letter} ` : ''}${symbol} ${name}`);
   const group = printSymbol(crystal.group.hermannMauguin);
   const whole = extentsOf(assemble(made.parts)).map((extent) => round(extent, 2));
-  const withRods = whole.some((extent, i) => extent > extents[i]! + 0.01) ? `, with rods ${whole.join(' × ')} mm` : '';
+  const larger = whole.some((extent, i) => Math.abs(extent - extents[i]!) > 0.01);
+  const inAll = larger ? `, the whole object ${whole.join(' × ')} mm` : '';
   return {
     title: crystal.title,
     pointGroup: crystal.group.hermannMauguin,
@@ -58,17 +59,17 @@ export function makeReport({ crystal }: Resolved, made: Made, folder: string) {
       watertight: checks.every(({ watertight }) => watertight),
       volume: sum(checks, ({ volume }) => volume),
     })),
-    hasRods: withRods !== '' || made.parts.length > 1,
+    hasRods: print.axes !== null || print.pair,
     warnings: made.warnings,
     findings: made.findings,
     remarks: [
       ...made.files
-        .slice(1)
+        .filter(({ holds }, i) => i > 0 || holds !== 'the crystal')
         .map(({ name, holds, copies }) => `${name}: ${holds}${copies > 1 ? `; print ${copies}` : ''}.`),
       ...absent,
       ...made.remarks,
     ],
-    summary: `${crystal.title}: point group ${group}, ${measures.faces.length} faces (${names.join(', ')}); crystal ${extents.join(' × ')} mm, ${volume} cm³${withRods}; closed, checked.`,
+    summary: `${crystal.title}: point group ${group}, ${measures.faces.length} faces (${names.join(', ')}); crystal ${extents.join(' × ')} mm, ${volume} cm³${inAll}; closed, checked.`,
   };
 }
 

@@ -1,4 +1,5 @@
 import load, { type Manifold, type ManifoldToplevel, type Mat4, type Polygons } from 'manifold-3d';
+import { ObjectError } from '../shape/object-error.ts';
 import { type Mesh, meshVolume } from './mesh.ts';
 import { withoutShortEdges } from './short-edges.ts';
 
@@ -97,14 +98,21 @@ export class Workbench {
       surface.fill(this.surfaceOf.get(id) ?? other, runIndex[run]! / 3, runIndex[run + 1]! / 3);
     });
     const mesh = withoutShortEdges({ positions, triangles: Uint32Array.from(triVerts), surface }, SHORTEST_EDGE);
-    const off = Math.abs(meshVolume(mesh) / solid.volume() - 1);
-    if (!(off < VOLUME_TOLERANCE)) throw new Error(`A part lost ${off} of its volume while its mesh was tidied.`);
+    const off = Math.abs(meshVolume(mesh) - solid.volume());
+    if (!(off < VOLUME_TOLERANCE * solid.volume() + SHIFT * solid.surfaceArea()))
+      throw new ObjectError(
+        'not-sound',
+        `a part lost ${off} mm³ of its volume while its mesh was tidied`,
+        'try a slightly different size, and please report the recipe',
+      );
     return mesh;
   }
 }
 
 /** Relative; single precision and drawn-together edges take far less. */
 const VOLUME_TOLERANCE = 1e-5;
+/** How far, in millimetres, a surface moves in single precision: what counts for slivers. */
+const SHIFT = 1e-5;
 
 /** Millimetres; far below what any printer resolves. */
 const SHORTEST_EDGE = 0.001;

@@ -62,12 +62,12 @@ export function together(meshes: readonly Mesh[]): Mesh {
 
 /** Moves meshes together so that their common box starts at the origin: the corner of a printer's bed. */
 export function ontoBed(meshes: readonly Mesh[]): Mesh[] {
-  const low = lowCorner(...meshes);
+  const low = lowCorner(meshes);
   return meshes.map((mesh) => moved(mesh, [-low[0]!, -low[1]!, -low[2]!]));
 }
 
 /** The least of each coordinate. */
-export const lowCorner = (...meshes: readonly Mesh[]): number[] =>
+const lowCorner = (meshes: readonly Mesh[]): number[] =>
   [0, 1, 2].map((axis) =>
     meshes.reduce((least, { positions }) => {
       let own = least;

@@ -43,7 +43,7 @@ export async function printedParts(
     const typeface = tools.typeface;
     const more = [
       stand && typeface && tools.stands?.standing(bench, shape, scale, stand, { printer, typeface, rods }),
-      rods && typeface && tools.keys?.keyed(bench, shape, scale, typeface, rods),
+      rods?.ends.length && typeface && tools.keys?.keyed(bench, shape, scale, typeface, rods),
     ];
     const all = [first, ...more.filter((one) => !!one)];
     return {

@@ -9,8 +9,7 @@ import { crystalMesh } from './body.ts';
 import type { BluntBody } from './handling/bevelled.ts';
 import type { Workbench } from './kit.ts';
 import type { RodExit } from './lettering/face-room.ts';
-import { type Mesh, moved } from './mesh.ts';
-import { lowCorner, type Part } from './part.ts';
+import { ontoBed, type Part } from './part.ts';
 import { rodSolids } from './rods/fused.ts';
 import { boreForRods } from './rods/separate.ts';
 import { crystalSurfaces, SECOND_COLOUR } from './surfaces.ts';
@@ -134,16 +133,29 @@ function bodyParts(
   const faces = crystalSurfaces(shape.crystal, blunt ? 'no crystal face' : 'rods and letters');
   const surfaces = letters || base || planes ? [...faces.slice(0, -1), { ...faces.at(-1)!, fine: true }] : faces;
   const mesh = bench.mesh(work.solid, surfaces.length - 1);
-  const onto = lowCorner(mesh).map((value) => -value);
-  const lie = (one: Mesh): Mesh => moved(one, onto);
   const inlays = work.inlays.flatMap(({ name, purpose, solid }): Part[] => {
     if (solid.isEmpty()) return [];
-    const own = bench.mesh(solid, 0);
-    const filled = { positions: own.positions, triangles: own.triangles };
-    const surface = { name, colour: SECOND_COLOUR, fine: true };
-    return [{ name, purpose, surfaces: [surface], mesh: lie(filled), placed: [filled], with: 'body' }];
+    const { positions, triangles } = bench.mesh(solid, 0);
+    const own = { positions, triangles };
+    return [
+      {
+        name,
+        purpose,
+        surfaces: [{ name, colour: SECOND_COLOUR, fine: true }],
+        mesh: own,
+        placed: [own],
+        with: 'body',
+      },
+    ];
   });
-  return [{ name: 'body', purpose: work.words.join(', '), surfaces, mesh: lie(mesh), placed: [mesh] }, ...inlays];
+  const body = { name: 'body', purpose: work.words.join(', '), surfaces, mesh, placed: [mesh] };
+  return ontoBedInOneJob([body, ...inlays]);
+}
+
+/** Where bores took corners away, the strips beside them may reach lower than the body. */
+function ontoBedInOneJob(parts: readonly Part[]): Part[] {
+  const meshes = ontoBed(parts.map(({ mesh }) => mesh));
+  return parts.map((part, i) => ({ ...part, mesh: meshes[i]! }));
 }
 
 function thinRods({ ends, diameter, symbolUnit }: RodPlan, { name, rod, wall }: PrinterProfile): string[] {

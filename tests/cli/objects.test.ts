@@ -25,7 +25,7 @@ describe('flags for objects', () => {
     [['--stand'], ['quartz-body.stl', 'quartz-stand.stl', 'quartz.stl'], /The stand is \d/],
     [['--files', '3mf'], ['quartz.3mf'], /closed, checked/],
     [['--files', 'glb,stl'], ['quartz.glb', 'quartz.stl'], /for screens/],
-    [['-f', 'stl, 3mf,glb', '--axes', '--letters'], ['quartz.3mf', 'quartz.glb', 'quartz.stl'], /with rods/],
+    [['-f', 'stl, 3mf,glb', '--axes', '--letters'], ['quartz.3mf', 'quartz.glb', 'quartz.stl'], /the whole object/],
   ] as const)('%j', async (words, names, message) => {
     const done = await made('quartz', ...words);
     expect(done.names).toEqual([...names]);

@@ -75,7 +75,7 @@ describe('make', () => {
   it('takes a recipe after a bare --axes for the recipe', async () => {
     const { code, err } = await goniolith('make', '--axes', 'quartz', '--out', folder());
     expect(code).toBe(0);
-    expect(err).toMatch(/with rods \d/);
+    expect(err).toMatch(/the whole object \d/);
   });
 
   it('keeps no provenance that no longer holds', async () => {

@@ -78,6 +78,29 @@ export const KINDS = {
     variants: [{ axes: true }, { axes: { fit: 'separate' } }, { axes: { fit: 'separate', diameter: 2 } }],
     refusals: ['rod-too-wide', 'rods-crowded'],
   },
+  bores: {
+    variants: [
+      { axes: { fit: 'press', diameter: 2 } },
+      { axes: { fit: 'slide', diameter: 2, depth: 8 }, letters: true },
+      { axes: { fit: 'press', diameter: 3 }, planes: { relief: 'inlaid', width: 1 } },
+    ],
+    refusals: ['rod-too-wide', 'rods-crowded', 'plane', 'wall'],
+  },
+  planes: {
+    variants: [
+      { planes: true },
+      { planes: 'raised', letters: 'raised' },
+      { planes: { relief: 'inlaid', width: 1, depth: 0.8 }, letters: 'inlaid' },
+      { planes: 'inlaid', axes: true },
+    ],
+    refusals: ['plane', 'wall', 'rod-too-wide'],
+  },
+  skins: {
+    variants: [{ body: 'skins' }, { body: { kind: 'skins', depth: 2 }, stand: true }],
+    refusals: ['wall', 'stand'],
+  },
+  key: { variants: [{ axes: true, key: true }], refusals: ['rod-too-wide'] },
+  base: { variants: [{ base: 'HM-12' }, { base: ['HM 7', '2024'], letters: true }], refusals: ['text'] },
 } as const satisfies Record<string, ObjectKind>;
 
 export type KindName = keyof typeof KINDS;

@@ -31,7 +31,8 @@ export function firstSound(
       if (!isSound || (isSound(placed) && isSound(laid.lying))) return laid;
       first ??= laid;
     } catch (error) {
-      if (error instanceof ObjectError || (number === ATTEMPTS - 1 && !first)) throw error;
+      if ((error instanceof ObjectError && error.code !== 'not-sound') || (number === ATTEMPTS - 1 && !first))
+        throw error;
     }
   }
   return first!;

@@ -3,6 +3,7 @@ import { type BrailleSize, brailleCells, brailleDots, type Cell } from '../lette
 import type { Point } from '../lettering/field.ts';
 import { layOutText, stackLines, type TextLayout } from '../lettering/lay-out.ts';
 import { sizeFor } from '../lettering/style.ts';
+import type { Typeface } from '../lettering/typeface.ts';
 import { LONGEST_LINE, MOST_LINES, type StandOptions, type StandSizes } from './options.ts';
 
 /** From baseline to baseline in heights of capitals: within the 1.35 to 1.70 of ADA 2010 703.2.8. */
@@ -29,7 +30,7 @@ export function raisedText(
   const layouts = lines.map((line, i) => {
     assertShort(line, i, 'the plaque');
     const layout = layOutText(typeface, line.trim(), sizes.letterGap / size);
-    const width = size * (layout.box.right - layout.box.left);
+    const width = lineWidth(typeface, line, sizes);
     if (width > widest) throw tooWide(line, i, 'the plaque', `${sizes.letterHeight} mm letters`, width, widest);
     return layout;
   });
@@ -37,6 +38,16 @@ export function raisedText(
   const { left, right, top, bottom } = layout.box;
   return { layout, size, width: size * (right - left), height: size * (top - bottom) };
 }
+
+/** Of a raised line, millimetres. */
+export function lineWidth(typeface: Typeface, line: string, { letterHeight, letterGap }: StandSizes): number {
+  const size = sizeFor(typeface, letterHeight);
+  const { box } = layOutText(typeface, line.trim(), letterGap / size);
+  return size * (box.right - box.left);
+}
+
+/** Of a line in braille, millimetres. */
+export const brailleWidth = (line: string, sizes: BrailleSize): number => widthOf(brailleCells(line.trim()), sizes);
 
 /** Lines in braille and their room, millimetres, dots' bases included. */
 export interface BrailleText {
