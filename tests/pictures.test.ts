@@ -26,6 +26,7 @@ const OBJECTS: Readonly<Record<string, string>> = {
   'frame.png': 'mineral: fluorite\nhabit: hexoctahedral\nprint: { body: frame, axes: "4", files: [png] }',
   'letters.png': 'mineral: quartz\nprint: { letters: engraved, axes: all, files: [png] }',
   'units.png': 'mineral: calcite\nprint: { body: units, files: [png] }',
+  'planes.png': 'mineral: fluorite\nprint: { planes: inlaid, letters: inlaid, files: [png] }',
   'stand.png': 'mineral: gypsum\nprint: { stand: true, files: [png] }',
   'blunt.png': 'mineral: pyrite\nhabit: pyritohedron\nprint: { blunt: 2, files: [png] }',
 };
