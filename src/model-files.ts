@@ -48,10 +48,19 @@ export function stlFiles({ crystal, print }: Resolved, parts: readonly Part[], s
   const whole = ontoBed([assemble(parts)])[0]!;
   if (others.length === 0) return [write(`${stem}.stl`, only!.purpose, 1, whole)];
   const each = parts.map((part) => write(`${stem}-${part.name}.stl`, part.purpose, part.placed.length, part.mesh));
-  return partsTouch(whole) ? each : [write(`${stem}.stl`, 'all parts in their places', 1, whole), ...each];
+  const all = unlessNotSound(() => write(`${stem}.stl`, 'all parts in their places', 1, whole));
+  return all ? [all, ...each] : each;
 }
 
-const partsTouch = (whole: Mesh): boolean => !isSound(whole);
+/** Each part has passed its own check by then: what fails the check of the whole is that they touch. */
+function unlessNotSound(step: () => MadeFile): MadeFile | null {
+  try {
+    return step();
+  } catch (error) {
+    if (error instanceof ObjectError && error.code === 'not-sound') return null;
+    throw error;
+  }
+}
 
 /** Whether a mesh passes the check once it is in single precision. */
 export const isSound = (mesh: Mesh): boolean => checkMesh(weldFloat32(mesh)).ok;
@@ -94,9 +103,12 @@ export async function threeMfFile(
     thumbnail: thumbnailPng(assembled(parts), { toward: GENERAL_VIEW }),
   });
   const name = `${stem}.3mf`;
-  const checks = read3mf(bytes).objects.map(({ mesh, transform }, i) =>
-    checked(name, placed(mesh, transform), objects[i]!.mesh),
-  );
+  const read = read3mf(bytes).objects;
+  const checks: MeshReport[] = [];
+  for (const [i, { mesh, transform }] of read.entries()) {
+    const isCopy = i > 0 && sameMesh(mesh, read[i - 1]!.mesh);
+    checks.push(isCopy ? checks[i - 1]! : checked(name, placed(mesh, transform), objects[i]!.mesh));
+  }
   return {
     name,
     bytes,
@@ -105,6 +117,13 @@ export async function threeMfFile(
     checks,
   };
 }
+
+/** Copies of a part stand one after the other, and one look at them is enough. */
+const sameMesh = (one: Mesh, other: Mesh): boolean =>
+  same(one.positions, other.positions) && same(one.triangles, other.triangles);
+
+const same = (one: ArrayLike<number>, other: ArrayLike<number>): boolean =>
+  one.length === other.length && Array.prototype.every.call(one, (value, i) => value === other[i]);
 
 /** Parts of one job behind each other, with the number that the object of each job's first part has. */
 function inJobs(parts: readonly Part[]): { part: Part; within?: number }[] {

@@ -18,11 +18,11 @@ export function trianglesMeet(p: Float64Array, s: Corners, t: Corners): boolean 
   if (hasA && hasB) return !hasC && foldedTogether(p, a, b, c, t);
   if (hasB && hasC) return foldedTogether(p, b, c, a, t);
   if (hasC && hasA) return foldedTogether(p, c, a, b, t);
+  if (edgeDivides(p, s, t) || edgeDivides(p, t, s)) return false;
   const sideOfT = sides(p, s, t);
   if (allOnOneSide(sideOfT)) return false;
   const sideOfS = sides(p, t, s);
   if (allOnOneSide(sideOfS)) return false;
-  if (inPlane(sideOfS) && (edgeDivides(p, s, t) || edgeDivides(p, t, s))) return false;
   const apex = hasA ? a : hasB ? b : hasC ? c : undefined;
   return sideMeets(p, s, t, sideOfS, apex) || sideMeets(p, t, s, sideOfT, apex);
 }
@@ -38,9 +38,10 @@ function sides(p: Float64Array, plane: Corners, t: Corners): [Sign, Sign, Sign] 
 
 const allOnOneSide = ([a, b, c]: readonly [Sign, Sign, Sign]): boolean => a !== 0 && a === b && b === c;
 
-const inPlane = ([a, b, c]: readonly [Sign, Sign, Sign]): boolean => a === 0 && b === 0 && c === 0;
-
-/** Whether, of two triangles in one plane, all of `t` but a common corner lies strictly beyond one edge of `s`. */
+/**
+ * Whether, seen along an axis, all of `t` but a common corner lies strictly beyond one edge of `s`: then they do not meet.
+ * Asked first, because it spares neighbours in one plane the exact arithmetic that being in one plane calls for.
+ */
 function edgeDivides(p: Float64Array, s: Corners, t: Corners): boolean {
   const axis = viewingAxis(p, s);
   const beyond = -orient2d(p, axis, s[0], s[1], s[2]);
@@ -87,10 +88,15 @@ function segmentMeetsInPlane(p: Float64Array, from: number, to: number, t: Corne
   );
 }
 
-/** An axis along which the triangle is seen with an area. */
+/** An axis along which the triangle is seen with an area: the one with the largest as far as rounding tells. */
 function viewingAxis(p: Float64Array, [a, b, c]: Corners): number {
-  for (let axis = 2; axis > 0; axis--) if (orient2d(p, axis, a, b, c) !== 0) return axis;
-  return 0;
+  const [i, j, k] = [3 * a, 3 * b, 3 * c];
+  const [ux, uy, uz] = [p[j]! - p[i]!, p[j + 1]! - p[i + 1]!, p[j + 2]! - p[i + 2]!];
+  const [vx, vy, vz] = [p[k]! - p[i]!, p[k + 1]! - p[i + 1]!, p[k + 2]! - p[i + 2]!];
+  const [x, y, z] = [Math.abs(uy * vz - uz * vy), Math.abs(uz * vx - ux * vz), Math.abs(ux * vy - uy * vx)];
+  const best = z >= x && z >= y ? 2 : y >= x ? 1 : 0;
+  if (orient2d(p, best, a, b, c) !== 0) return best;
+  return [2, 1, 0].find((axis) => orient2d(p, axis, a, b, c) !== 0) ?? 0;
 }
 
 function segmentsCross(p: Float64Array, axis: number, a: number, b: number, c: number, d: number): boolean {
