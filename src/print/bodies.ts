@@ -48,7 +48,7 @@ export function bodyParts(
     }
     case 'halves':
       return halves(bench, shape, scale, {
-        plane: { normal: cutNormal(shape, body.plane), offset: 0 },
+        plane: { normal: cutNormal(shape, body.plane), offset: body.offset },
         dowel: body.join === 'dowels' ? { ...PIN, clearance: printer.rod.clearance, count: 2 } : null,
         magnets: body.join === 'magnets' ? { ...MAGNET, clearance: MAGNET_CLEARANCE } : null,
         wall: printer.usualWall,

@@ -26,8 +26,12 @@ export function readBody(input: BodyInput, group: PointGroup | undefined): BodyP
       return { kind: 'frame', strut: lengthOr(strut, null), bead };
     }
     case 'halves': {
-      const { plane, join = 'dowels' } = 'plane' in given || 'join' in given ? given : {};
-      return { kind: 'halves', plane: plane === undefined ? null : faceOf(plane, group), join };
+      const {
+        plane,
+        offset = 0,
+        join = 'dowels',
+      } = 'plane' in given || 'offset' in given || 'join' in given ? given : {};
+      return { kind: 'halves', plane: plane === undefined ? null : faceOf(plane, group), offset, join };
     }
     case 'sectors': {
       const { by = 'face', gap } = 'by' in given || 'gap' in given ? given : {};

@@ -63,7 +63,13 @@ export type BodyPlan =
   | { readonly kind: 'solid' }
   | { readonly kind: 'hollow'; readonly wall: Millimetres | null; readonly drains: boolean | null }
   | { readonly kind: 'frame'; readonly strut: Millimetres | null; readonly bead: boolean }
-  | { readonly kind: 'halves'; readonly plane: Miller | null; readonly join: 'dowels' | 'magnets' | 'none' }
+  | {
+      readonly kind: 'halves';
+      readonly plane: Miller | null;
+      /** Of the cut from the centre, millimetres. */
+      readonly offset: number;
+      readonly join: 'dowels' | 'magnets' | 'none';
+    }
   | { readonly kind: 'sectors'; readonly by: 'face' | 'form'; readonly gap: Millimetres | null }
   | { readonly kind: 'units'; readonly gap: Millimetres | null }
   | { readonly kind: 'skins'; readonly depth: Millimetres | null };

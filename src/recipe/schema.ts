@@ -69,6 +69,7 @@ const halves = z.strictObject({
   plane: faceText
     .optional()
     .describe('the cut runs through the centre, parallel to this face; a mirror plane by default'),
+  offset: z.number().optional().describe('of the cut from the centre towards that face, mm'),
   join: z.enum(['dowels', 'magnets', 'none']).optional(),
 });
 const sectors = z.strictObject({ kind: z.literal('sectors'), by: z.enum(['face', 'form']).optional(), gap: length });

@@ -61,6 +61,17 @@ describe('flags for objects', () => {
     }
   });
 
+  it('a cut that misses the crystal is refused, and nothing is written', async () => {
+    const file = join(folder(), 'own.yaml');
+    writeFileSync(file, 'mineral: fluorite\nprint: { size: 50, body: { kind: halves, plane: "111", offset: 60 } }\n');
+    const out = join(folder(), 'out');
+    const { code, err } = await goniolith('make', file, '--out', out);
+    expect(code).toBe(1);
+    // Half the diagonal of a cube of 50 mm.
+    expect(err).toMatch(/misses the crystal, which reaches from -43\.3 mm to 43\.3 mm/);
+    expect(existsSync(out)).toBe(false);
+  });
+
   it('magnets are warned of', async () => {
     const file = join(folder(), 'own.yaml');
     writeFileSync(file, 'mineral: quartz\nprint: { body: { kind: halves, join: magnets } }\n');

@@ -37,6 +37,7 @@ export const KINDS = {
       { body: { kind: 'halves', join: 'magnets' } },
       { body: { kind: 'halves', join: 'none' } },
       { body: { kind: 'halves', plane: '111' } },
+      { body: { kind: 'halves', plane: '111', offset: 4 } },
     ],
     refusals: ['dowel', 'magnet'],
   },
