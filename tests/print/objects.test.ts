@@ -8,9 +8,9 @@ import { ObjectError } from '../../src/shape/object-error.ts';
 import { crystals, runs } from '../shape/random-crystals.ts';
 import { FILES, KIND_NAMES, KINDS, type KindName, type Print, spreadMinerals } from './object-options.ts';
 
-/** GONIOLITH_RUNS makes all presets in all ways; a usual run forty of them, each kind of object once. */
+/** GONIOLITH_RUNS makes all presets in all ways; a usual run sixty of them, each kind of object once. */
 const long = process.env.GONIOLITH_RUNS !== undefined;
-const MINERALS = spreadMinerals(long ? 1000 : 40);
+const MINERALS = spreadMinerals(long ? 1000 : 60);
 const SIZES = [60, 65, 70, 75, 80];
 /** Shares of objects that may be refused. Random crystals are often splinters; minerals are not. */
 const REFUSED = { presets: 0.03, random: 0.4 };
@@ -102,7 +102,7 @@ function leastHeight(positions: Float64Array): number {
 describe('objects of presets', () => {
   it('come from all seven crystal systems', () => {
     expect(new Set(MINERALS.map((mineral) => crystal(mineral).group.system)).size).toBe(7);
-    expect(MINERALS.length).toBeGreaterThanOrEqual(40);
+    expect(MINERALS.length).toBeGreaterThanOrEqual(60);
   });
 
   it.each(KIND_NAMES)(
