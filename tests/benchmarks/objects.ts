@@ -34,8 +34,11 @@ const OPTIONS: readonly (readonly [string, Print])[] = [
   ['solid', {}],
   ['axes, fused', { axes: true }],
   ['axes, separate', { axes: { fit: 'separate' } }],
+  ['bores for metal rod', { axes: { fit: 'press', diameter: 2 } }],
+  ['axes and key', { axes: true, key: true }],
   ['letters, engraved', { letters: true }],
   ['letters, raised', { letters: 'raised' }],
+  ['letters, inlaid', { letters: 'inlaid' }],
   ['blunt, round', { blunt: true }],
   ['blunt, bevel', { blunt: { bevel: 1 } }],
   ['hollow', { body: 'hollow' }],
@@ -43,6 +46,7 @@ const OPTIONS: readonly (readonly [string, Print])[] = [
   ['halves', { body: 'halves' }],
   ['sectors', { body: 'sectors' }],
   ['units', { body: 'units' }],
+  ['skins', { body: 'skins' }],
   ['stand', { stand: true }],
   ['letters, as 3MF', { letters: true, files: ['3mf'] }],
   ['letters, as GLB', { letters: true, files: ['glb'] }],
@@ -92,7 +96,8 @@ export function objectMemory(): Table {
   const entry = JSON.stringify(join(process.cwd(), 'dist', 'index.js'));
   const script = `import { make } from ${entry}; await make(${JSON.stringify({ mineral: 'quartz', print: WHOLE })});
     process.stdout.write(String(process.resourceUsage().maxRSS));`;
-  const { stdout } = spawnSync(process.execPath, ['--input-type=module', '-e', script], { encoding: 'utf8' });
+  const { stdout, status, stderr } = spawnSync(process.execPath, ['--input-type=module', '-e', script], { encoding: 'utf8' });
+  if (status !== 0) throw new Error(`The model was not made: ${stderr}`);
   const rows = [['letters, separate axes, stand, all files', (Number(stdout) / 1024).toFixed(0)]];
   return { title: 'Peak memory of a process that makes one quartz, MiB', head: ['', 'MiB'], rows };
 }
