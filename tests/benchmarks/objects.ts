@@ -96,7 +96,9 @@ export function objectMemory(): Table {
   const entry = JSON.stringify(join(process.cwd(), 'dist', 'index.js'));
   const script = `import { make } from ${entry}; await make(${JSON.stringify({ mineral: 'quartz', print: WHOLE })});
     process.stdout.write(String(process.resourceUsage().maxRSS));`;
-  const { stdout, status, stderr } = spawnSync(process.execPath, ['--input-type=module', '-e', script], { encoding: 'utf8' });
+  const { stdout, status, stderr } = spawnSync(process.execPath, ['--input-type=module', '-e', script], {
+    encoding: 'utf8',
+  });
   if (status !== 0) throw new Error(`The model was not made: ${stderr}`);
   const rows = [['letters, separate axes, stand, all files', (Number(stdout) / 1024).toFixed(0)]];
   return { title: 'Peak memory of a process that makes one quartz, MiB', head: ['', 'MiB'], rows };
