@@ -3,7 +3,8 @@ import type { LettersPlan, ReliefPlan } from '../recipe/crystal.ts';
 import type { PrinterProfile } from '../recipe/schema.ts';
 import { facePlanes } from '../shape/face-planes.ts';
 import type { ClosedShape } from '../shape/shape.ts';
-import { faceName, largestFace } from './bodies/resting.ts';
+import { largestFace } from './bodies/resting.ts';
+import { faceName } from './face-name.ts';
 import type { Workbench } from './kit.ts';
 import { letterBase } from './lettering/base.ts';
 import type { SurfaceLine } from './lettering/between-lines.ts';
@@ -69,7 +70,7 @@ export function baseLettered(
   const { solid, height } = letterBase(bench, body, rest, { lines, style, planes, avoid, strips });
   const where = faceName(shape, face);
   const remark = `"${lines.join(' / ')}" stands under ${where}, in letters of ${height.toFixed(1)} mm; lay the crystal on this face.`;
-  return { solid, word: 'with a line under it', inlay: null, remarks: [remark] };
+  return { solid, word: 'with text under its resting face', inlay: null, remarks: [remark] };
 }
 
 function styleOf(relief: ReliefPlan, { printer, typeface }: Omit<Lettering, 'avoid' | 'strips'>): LetterStyle {

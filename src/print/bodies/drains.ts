@@ -1,6 +1,7 @@
 import type { Manifold } from 'manifold-3d';
 import { ObjectError } from '../../shape/object-error.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
+import { faceName } from '../face-name.ts';
 import type { Workbench } from '../kit.ts';
 import { boreOutline } from '../rods/solid.ts';
 import { dot, type Vector, vectorAt } from '../vectors.ts';
@@ -8,7 +9,6 @@ import { mm, mmAtMost } from './body-parts.ts';
 import { largestDisc } from './convex-polygon.ts';
 import type { Piece } from './cut-piece.ts';
 import { frameAlong } from './place.ts';
-import { faceName } from './resting.ts';
 import { flatFace, inSpace } from './sites.ts';
 
 /** A round hole square through one wall. */

@@ -2,6 +2,7 @@ import { faceCorners } from '../../polyhedron/measures.ts';
 import type { RodPlan } from '../../rods/plan.ts';
 import { ObjectError } from '../../shape/object-error.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
+import { faceName } from '../face-name.ts';
 import type { Workbench } from '../kit.ts';
 import type { Mesh } from '../mesh.ts';
 import type { Part } from '../part.ts';
@@ -11,7 +12,7 @@ import { type BodyParts, mm } from './body-parts.ts';
 import { largestDisc } from './convex-polygon.ts';
 import { largestInset } from './hollow.ts';
 import { lieOn } from './lie.ts';
-import { downwards, faceName, type Resting } from './resting.ts';
+import { downwards, type Resting } from './resting.ts';
 import { flatFace } from './sites.ts';
 import { crystalSkeleton, isHeld, stayTips } from './skeleton.ts';
 import { firstSound, type IsSound } from './sound.ts';
@@ -60,7 +61,7 @@ export function frameBody(
   const stays = (bead !== null || rods) && !isHeld(skeleton, rods, plan.strut) ? stayTips(skeleton.corners) : [];
   const down = downwards(shape, plan.resting);
   const lie = (mesh: Mesh): Mesh => lieOn(mesh, down);
-  const { placed, lying } = firstSound(isSound, lie, (layout) => {
+  const laid = firstSound(isSound, lie, (layout) => {
     const solids = [
       ...balls(bench, skeleton.corners, plan.joint, layout),
       ...struts(bench, skeleton, plan, layout),
@@ -70,6 +71,12 @@ export function frameBody(
     ];
     return bench.mesh(bench.union(solids), 1);
   });
+  if (!laid)
+    throw new ObjectError(
+      'not-sound',
+      'the struts fold over each other in single precision however their facets are laid out',
+      'choose a slightly different size or strut, and please report the recipe',
+    );
   const part: Part = {
     name: 'body',
     purpose: `the edges of the crystal as struts of ${mm(plan.strut)}${bead === null ? '' : ', with a bead at its centre of inversion'}`,
@@ -77,8 +84,8 @@ export function frameBody(
       { name: 'frame', colour: FRAME_COLOUR },
       { name: 'rods', colour: ROD_COLOUR },
     ],
-    mesh: lying,
-    placed: [placed],
+    mesh: laid.lying,
+    placed: [laid.placed],
   };
   return {
     parts: [part],

@@ -1,5 +1,3 @@
-import { printFace } from '../../crystal/indices.ts';
-import { miller } from '../../crystal/spaces.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
 import { unit, type Vector, vectorAt } from '../vectors.ts';
 
@@ -15,9 +13,3 @@ export function downwards(shape: ClosedShape, resting: Resting | undefined): Vec
 /** Plane number; of equal ones the first. */
 export const largestFace = ({ measures: { area, faces } }: ClosedShape): number =>
   faces.reduce((best, face) => (area[face]! > area[best]! * (1 + 1e-9) ? face : best));
-
-/** A face in brackets, by its plane number. */
-export function faceName({ solid, crystal }: ClosedShape, plane: number): string {
-  const [h, k, l] = vectorAt(solid.planes.normals, plane);
-  return printFace(miller(h, k, l), crystal.group.axes, { brackets: '(' });
-}

@@ -1,17 +1,17 @@
 import { ObjectError } from '../../shape/object-error.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
+import { faceName, fileWord } from '../face-name.ts';
 import type { Workbench } from '../kit.ts';
 import type { Mesh } from '../mesh.ts';
-import type { Part } from '../part.ts';
+import type { Part, Surface } from '../part.ts';
 import { crystalSurfaces } from '../surfaces.ts';
 import { minus, times, unit, vectorAt } from '../vectors.ts';
 import { type BodyParts, mm } from './body-parts.ts';
 import { type Cut, cutPiece, insetPiece, type Piece, pieceMesh } from './cut-piece.ts';
 import { faceMesh } from './face-mesh.ts';
 import { lieOn } from './lie.ts';
-import { faceName } from './resting.ts';
 import { isSimple, sectorGroups } from './sector-groups.ts';
-import { firstSound, type IsSound } from './sound.ts';
+import { firstSound, type IsSound, type Laid } from './sound.ts';
 
 export interface SectorsPlan {
   /** A piece for each face, or for all faces of a form that hang together. */
@@ -24,7 +24,7 @@ export interface SectorsPlan {
  * The growth sectors of an ideal crystal: the pyramids from its centre over its faces, each of which is what that face
  * has laid down.
  * @param isSound told whether a mesh can be written, this finds tools whose cuts can
- * @throws ObjectError `gap` when the gap leaves nothing of a sector
+ * @throws ObjectError `gap` when the gap leaves nothing of a sector, `not-sound` for one that is too thin
  */
 export function growthSectors(
   bench: Workbench,
@@ -37,37 +37,41 @@ export function growthSectors(
   const whole = insetPiece(shape, scale, 0)!;
   const { groups, split } = plan.by === 'face' ? singleFaces(whole) : sectorGroups(shape, whole, plan.gap > 0);
   const surfaces = crystalSurfaces(shape.crystal, 'sector');
-  const parts = groups.map((planes): Part => {
-    const form = surfaces[shape.solid.planes.form[planes[0]!]!]!;
+  const { solid } = shape;
+  const folded = new Set<number>();
+  const part = (planes: readonly number[]): Part[] => {
+    const form = solid.planes.form[planes[0]!]!;
     const lie = (mesh: Mesh): Mesh => lieOn(mesh, vectorAt(shape.measures.normals, planes[0]!));
-    const make = sectorMesh(bench, shape, scale, whole, planes, plan.gap);
-    const { placed, lying } = firstSound(isSound, lie, make);
-    const names = planes.map((plane) => faceName(shape, plane));
-    return {
-      name: `sector-${fileWord(names[0]!)}`,
-      purpose: `growth sector of ${names.join(', ')}`,
-      surfaces: [form, { name: `sector of ${form.name}`, colour: form.colour }],
-      mesh: lying,
-      placed: [placed],
-    };
-  });
+    const laid = firstSound(isSound, lie, sectorMesh(bench, shape, scale, whole, planes, plan.gap));
+    if (laid) return [sectorPart(shape, surfaces[form]!, planes, laid)];
+    if (planes.length === 1) throw notSound(shape, planes[0]!);
+    folded.add(form);
+    return planes.flatMap((plane) => part([plane]));
+  };
+  const parts = groups.flatMap(part);
+  const named = (forms: Iterable<number>): string => [...forms].map((form) => surfaces[form]!.name).join(', ');
+  return { parts, remarks: remarksOn(named(split), named(folded)), warnings: [] };
+}
+
+function sectorPart(shape: ClosedShape, form: Surface, planes: readonly number[], { placed, lying }: Laid): Part {
+  const names = planes.map((plane) => faceName(shape, plane));
   return {
-    parts,
-    remarks: remarksOn(
-      split,
-      surfaces.map(({ name }) => name),
-    ),
-    warnings: [],
+    name: `sector-${fileWord(names[0]!)}`,
+    purpose: `growth sector of ${names.join(', ')}`,
+    surfaces: [form, { name: `sector of ${form.name}`, colour: form.colour }],
+    mesh: lying,
+    placed: [placed],
   };
 }
 
 const singleFaces = ({ faces }: Piece) => ({ groups: faces.map(({ plane }) => [plane]), split: [] });
 
-function remarksOn(split: readonly number[], names: readonly string[]): string[] {
-  if (split.length === 0) return [];
-  const forms = split.map((form) => names[form]!).join(', ');
+function remarksOn(split: string, folded: string): string[] {
+  const each = (faces: string, forms: string, why: string): string[] =>
+    forms === '' ? [] : [`${faces} of ${forms} have a sector each: ${why}`];
   return [
-    `The faces of ${forms} have a sector each: joined, these would touch themselves in a point. A gap joins them.`,
+    ...each('The faces', split, 'joined, these would touch themselves in a point. A gap joins them.'),
+    ...each('Some faces', folded, 'joined, these would fold over themselves where they are thinnest.'),
   ];
 }
 
@@ -142,12 +146,16 @@ function grownSector(shape: ClosedShape, scale: number, plane: number, gap: numb
   return cutPiece(shape, scale, [...sides(shape, plane, gap / 2), ...ends], [])!;
 }
 
+const notSound = (shape: ClosedShape, plane: number): ObjectError =>
+  new ObjectError(
+    'not-sound',
+    `the growth sector of ${faceName(shape, plane)} is too thin to be written in single precision`,
+    'choose another gap, a larger crystal, or leave forms with such small faces away',
+  );
+
 const vanished = (shape: ClosedShape, plane: number, gap: number): ObjectError =>
   new ObjectError(
     'gap',
     `a gap of ${mm(gap)} leaves nothing of the growth sector of ${faceName(shape, plane)}`,
     'choose a smaller gap, a larger crystal, or leave forms with such small faces away',
   );
-
-/** (10-11) as 10bar11: fit for a file name. */
-const fileWord = (face: string): string => face.replace(/[()]/g, '').replace(/-/g, 'bar').replace(/ /g, '_');

@@ -13,27 +13,24 @@ export type IsSound = (mesh: Mesh) => boolean;
 const ATTEMPTS = 6;
 
 /**
- * The first sound mesh of several attempts, as it is and as it lies; else the first of all. Of bodies with thousands of
+ * The first sound mesh of several attempts, as it is and as it lies; null when none is. Of bodies with thousands of
  * crossing facets about one in a hundred folds over itself somewhere in single precision, or cannot be tidied; laid out a
  * little differently it does not.
- * @throws what the last attempt throws when none makes a mesh; ObjectErrors at once
+ * @throws what an attempt throws, but for `not-sound`
  */
 export function firstSound(
   isSound: IsSound | undefined,
   lie: (mesh: Mesh) => Mesh,
   attempt: (number: number) => Mesh,
-): Laid {
-  let first: Laid | undefined;
+): Laid | null {
   for (let number = 0; number < ATTEMPTS; number++) {
     try {
       const placed = attempt(number);
       const laid = { placed, lying: lie(placed) };
       if (!isSound || (isSound(placed) && isSound(laid.lying))) return laid;
-      first ??= laid;
     } catch (error) {
-      if ((error instanceof ObjectError && error.code !== 'not-sound') || (number === ATTEMPTS - 1 && !first))
-        throw error;
+      if (!(error instanceof ObjectError && error.code === 'not-sound')) throw error;
     }
   }
-  return first!;
+  return null;
 }

@@ -3,6 +3,7 @@ import { printFace } from '../../crystal/indices.ts';
 import { miller } from '../../crystal/spaces.ts';
 import { facePlanes } from '../../shape/face-planes.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
+import { faceName } from '../face-name.ts';
 import type { Workbench } from '../kit.ts';
 import { betweenLines, type SurfaceLine } from './between-lines.ts';
 import { facePolygon, type RodExit, roomOn } from './face-room.ts';
@@ -95,7 +96,7 @@ export function letterFaces(
       })
       .filter((one) => one !== null && one.size >= wantedSizes(style, layout).least)
       .reduce<Chosen | null>((best, one) => (best && !isBetter(one!, best) ? best : one), null);
-    if (!chosen) tooSmall.push(faceName(shape, face));
+    if (!chosen) tooSmall.push(nameAndLetter(shape, face));
     else faces.push(lettersAt(bench, style, layout, face, chosen));
   });
   const solids = faces.map(({ letters }) => letters);
@@ -134,9 +135,9 @@ function faceText({ crystal, solid }: ClosedShape, kind: FaceText, face: number)
   return printFace(indicesOf(solid.planes.normals, face), crystal.group.axes, { overbar: true });
 }
 
-function faceName({ crystal, solid }: ClosedShape, face: number): string {
-  const { letter } = crystal.forms[solid.planes.form[face]!]!;
-  const symbol = printFace(indicesOf(solid.planes.normals, face), crystal.group.axes, { brackets: '(' });
+function nameAndLetter(shape: ClosedShape, face: number): string {
+  const { letter } = shape.crystal.forms[shape.solid.planes.form[face]!]!;
+  const symbol = faceName(shape, face);
   return letter === null ? symbol : `${symbol} ${letter}`;
 }
 

@@ -1,7 +1,7 @@
 import { faceCorners } from '../../polyhedron/measures.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
 import { mm } from '../bodies/body-parts.ts';
-import { faceName } from '../bodies/resting.ts';
+import { faceName } from '../face-name.ts';
 import { dot, vectorAt } from '../vectors.ts';
 import type { MirrorLine, MirrorLinesPlan } from './mirror-lines.ts';
 

@@ -4,7 +4,8 @@ import { mm, mmAtMost } from '../bodies/body-parts.ts';
 import { faceMesh } from '../bodies/face-mesh.ts';
 import { largestInset } from '../bodies/hollow.ts';
 import { lieOn } from '../bodies/lie.ts';
-import { downwards, faceName, type Resting } from '../bodies/resting.ts';
+import { downwards, type Resting } from '../bodies/resting.ts';
+import { faceName, fileWord } from '../face-name.ts';
 import type { Mesh } from '../mesh.ts';
 import { assemble, type Part, type Surface } from '../part.ts';
 import { crystalSurfaces } from '../surfaces.ts';
@@ -140,6 +141,3 @@ function tooDeep(shape: ClosedShape, scale: number, depth: number): ObjectError 
     `choose a depth between 0 and ${mmAtMost(largest)}, or a larger crystal`,
   );
 }
-
-/** (10-11) as 10bar11: fit for a file name. */
-const fileWord = (face: string): string => face.replace(/[()]/g, '').replace(/-/g, 'bar').replace(/ /g, '_');

@@ -41,6 +41,27 @@ describe('growth sectors', () => {
           clean(mesh, `${name} ${part}`);
   });
 
+  it('of a form that would fold over themselves stay single, and this is told', async () => {
+    const splinter = sample({
+      pointGroup: '-42m',
+      cell: { a: 13.88, c: 14.9 },
+      forms: [
+        { face: [4, -1, -1], distance: 1.314 },
+        { face: [4, -3, 3], distance: 1.482 },
+        { face: [3, 1, 4], distance: 0.945 },
+        { face: [1, 0, 0], distance: 1.7238000000000002 },
+        { face: [0, 1, 0], distance: 2.0709 },
+        { face: [0, 0, 1], distance: 1.0439 },
+        { face: [-1, 0, 0], distance: 1.0517 },
+        { face: [0, -1, 0], distance: 1.3091 },
+        { face: [0, 0, -1], distance: 1.3429 },
+      ],
+    });
+    const { parts, remarks } = await sectors(splinter, { by: 'form', gap: 0.4 });
+    for (const { name, mesh } of parts) clean(mesh, name);
+    expect(remarks.join()).toMatch(/Some faces of \{4-33\} have a sector each: .* fold over/);
+  });
+
   /** A tiny face may lose its sector to the gap, and is told. */
   async function partsOrNone(one: Sample, plan: SectorsPlan) {
     try {
