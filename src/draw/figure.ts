@@ -1,10 +1,11 @@
 import { faceCorners } from '../polyhedron/measures.ts';
+import { convexHull } from '../polyhedron/polygon.ts';
 import { facePlanes } from '../shape/face-planes.ts';
 import type { ClosedShape } from '../shape/shape.ts';
 import { interrupt } from './hidden-lines.ts';
 import { type FaceLabel, faceLabels, type LabelKind, labelCorners, labelText } from './labels.ts';
 import { INK, PAPER, shaded, tintOf } from './palette.ts';
-import { type Bounds, boundsOf, hull, type Placement, place, projectAll } from './project.ts';
+import { type Bounds, boundsOf, type Placement, place, projectAll } from './project.ts';
 import { type DrawnRods, type RodPiece, rodPieces } from './rods.ts';
 import { closedPath, element, linePath, openPath } from './svg.ts';
 import { dot, type Point, unit, type Vector, vectorAt } from './vector.ts';
@@ -145,7 +146,7 @@ function paintEdges(
 }
 
 const obstaclesOf = (rods: readonly RodPiece[]): Point[][] =>
-  rods.filter(({ kind }) => kind === 'rod' || kind === 'side').map(({ outline }) => hull(outline));
+  rods.filter(({ kind }) => kind === 'rod' || kind === 'side').map(({ outline }) => convexHull(outline));
 
 function labelsOf(
   shape: ClosedShape,

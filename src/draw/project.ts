@@ -63,20 +63,3 @@ export function signedArea(polygon: readonly Point[]): number {
   }
   return twice / 2;
 }
-
-/** Convex hull, counter-clockwise, without points on its sides (monotone chain, Andrew 1979). */
-export function hull(points: readonly Point[]): Point[] {
-  const sorted = [...points].sort((p, q) => p[0] - q[0] || p[1] - q[1]);
-  return [...chain(sorted), ...chain(sorted.reverse())];
-}
-
-function chain(sorted: readonly Point[]): Point[] {
-  const out: Point[] = [];
-  for (const point of sorted) {
-    while (out.length > 1 && turns(out.at(-2)!, out.at(-1)!, point) <= 0) out.pop();
-    out.push(point);
-  }
-  return out.slice(0, -1);
-}
-
-const turns = (p: Point, q: Point, r: Point): number => (q[0] - p[0]) * (r[1] - p[1]) - (q[1] - p[1]) * (r[0] - p[0]);

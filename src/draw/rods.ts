@@ -1,7 +1,8 @@
+import { convexHull } from '../polyhedron/polygon.ts';
 import { AXIS_SYMBOLS, type Outline } from '../rods/axis-symbol.ts';
 import type { RodEnd, RodPlan } from '../rods/plan.ts';
 import { exitOf, type FacePlane } from '../shape/face-planes.ts';
-import { hull, project } from './project.ts';
+import { project } from './project.ts';
 import { along, cross, dot, type Point, type Vector } from './vector.ts';
 import type { ViewFrame } from './view.ts';
 import { EDGE_ON, stateOf } from './visible.ts';
@@ -113,7 +114,7 @@ function platePieces(laid: RodEnd, symbolUnit: number, planes: readonly FacePlan
   const state = stateOf(end.along, frame.toward);
   const corners = outline.map((p) => corner(p, base));
   const layer = layerOf(corners, end.along, planes, frame);
-  const side = hull([...flat(outline, base), ...flat(outline, tip)]);
+  const side = convexHull([...flat(outline, base), ...flat(outline, tip)]);
   const piece = (kind: RodPieceKind, shape: readonly Point[]): RodPiece => ({
     kind,
     layer,

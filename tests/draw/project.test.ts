@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { boundsOf, fitInto, hull, place, signedArea } from '../../src/draw/project.ts';
+import { boundsOf, fitInto, place, signedArea } from '../../src/draw/project.ts';
 import type { Point } from '../../src/draw/vector.ts';
+import { convexHull } from '../../src/polyhedron/polygon.ts';
 
 const point = fc.tuple(fc.integer({ min: -20, max: 20 }), fc.integer({ min: -20, max: 20 }));
 
@@ -34,7 +35,7 @@ describe('convex hull', () => {
       [1, 0],
       [2, 1],
     ];
-    expect(hull(square)).toEqual([
+    expect(convexHull(square)).toEqual([
       [0, 0],
       [2, 0],
       [2, 2],
@@ -45,7 +46,7 @@ describe('convex hull', () => {
   it('has no point to the right of any side', () => {
     fc.assert(
       fc.property(fc.array(point, { minLength: 3 }), (points) => {
-        const outline = hull(points as Point[]);
+        const outline = convexHull(points as Point[]);
         fc.pre(outline.length > 2);
         expect(signedArea(outline)).toBeGreaterThan(0);
         for (const [i, [x, y]] of outline.entries()) {

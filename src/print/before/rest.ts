@@ -1,6 +1,6 @@
 import type { Mat4 } from 'manifold-3d';
+import { convexHull, type Point } from '../../polyhedron/polygon.ts';
 import { hullOf } from '../handling/hull.ts';
-import { convexHull, type Point } from '../handling/rectangle-fit.ts';
 import type { Workbench } from '../kit.ts';
 import type { Mesh } from '../mesh.ts';
 import { across, cross, dot, length, minus, plus, times, unit, type Vector, vectorAt } from '../vectors.ts';

@@ -1,3 +1,4 @@
+import { convexHull } from '../../polyhedron/polygon.ts';
 export type Point = readonly [number, number];
 
 export interface RectangleFit {
@@ -51,20 +52,3 @@ function extent(points: readonly Point[], turn: number): { length: number; x: nu
   }
   return { length: most - least, x: high[0] - low[0], y: high[1] - low[1] };
 }
-
-/** Corners of the convex hull, counter-clockwise (Andrew's monotone chain, 1979). */
-export function convexHull(points: readonly Point[]): Point[] {
-  const sorted = [...points].sort((p, q) => p[0] - q[0] || p[1] - q[1]);
-  const chain = (all: readonly Point[]): Point[] => {
-    const kept: Point[] = [];
-    for (const point of all) {
-      while (kept.length > 1 && turnOf(kept.at(-2)!, kept.at(-1)!, point) <= 0) kept.pop();
-      kept.push(point);
-    }
-    return kept.slice(0, -1);
-  };
-  const hull = [...chain(sorted), ...chain([...sorted].reverse())];
-  return hull.length === 0 ? sorted.slice(0, 1) : hull;
-}
-
-const turnOf = (a: Point, b: Point, c: Point): number => (b[0] - a[0]) * (c[1] - a[1]) - (b[1] - a[1]) * (c[0] - a[0]);

@@ -1,3 +1,4 @@
+import { centroid } from '../../polyhedron/polygon.ts';
 import { type Box, BoxRoom, type Disc, type Side } from './box-room.ts';
 import type { Point } from './field.ts';
 
@@ -93,19 +94,4 @@ function towards(middle: Point, best: Spot, room: BoxRoom, enough: number): Spot
     if (size >= enough) return { centre, size };
   }
   return best;
-}
-
-/** Centre of mass of a convex polygon. */
-function centroid(polygon: readonly Point[]): Point {
-  const [x0, y0] = polygon[0]!;
-  let [x, y, area] = [0, 0, 0];
-  for (let i = 1; i + 1 < polygon.length; i++) {
-    const [ax, ay] = [polygon[i]![0] - x0, polygon[i]![1] - y0];
-    const [bx, by] = [polygon[i + 1]![0] - x0, polygon[i + 1]![1] - y0];
-    const twice = ax * by - ay * bx;
-    x += (twice * (ax + bx)) / 3;
-    y += (twice * (ay + by)) / 3;
-    area += twice;
-  }
-  return area === 0 ? [x0, y0] : [x0 + x / area, y0 + y / area];
 }

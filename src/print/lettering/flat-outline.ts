@@ -1,4 +1,5 @@
 import type { Manifold } from 'manifold-3d';
+import { convexHull } from '../../polyhedron/polygon.ts';
 import type { FacePlane } from '../../shape/face-planes.ts';
 import { ObjectError } from '../../shape/object-error.ts';
 import { dot, type Vector } from '../vectors.ts';
@@ -15,7 +16,7 @@ export function flatOutline(body: Manifold, { normal, distance }: FacePlane, fie
     const point: Vector = [vertProperties[at]!, vertProperties[at + 1]!, vertProperties[at + 2]!];
     if (Math.abs(dot(normal, point) - distance) < IN_PLANE) points.push(onField(field, point));
   }
-  const outline = convexOutline(points);
+  const outline = convexHull(points);
   if (outline.length >= 3) return outline;
   throw new ObjectError(
     'text',
@@ -23,20 +24,3 @@ export function flatOutline(body: Manifold, { normal, distance }: FacePlane, fie
     'let it rest on one of its faces, or put the text on a stand',
   );
 }
-
-/** Convex hull, counter-clockwise, without points on its sides (monotone chain, Andrew 1979). */
-export function convexOutline(points: readonly Point[]): Point[] {
-  const sorted = [...points].sort((p, q) => p[0] - q[0] || p[1] - q[1]);
-  return [...chain(sorted), ...chain(sorted.toReversed())];
-}
-
-function chain(sorted: readonly Point[]): Point[] {
-  const out: Point[] = [];
-  for (const point of sorted) {
-    while (out.length > 1 && turn(out.at(-2)!, out.at(-1)!, point) <= 0) out.pop();
-    out.push(point);
-  }
-  return out.slice(0, -1);
-}
-
-const turn = (p: Point, q: Point, r: Point): number => (q[0] - p[0]) * (r[1] - p[1]) - (q[1] - p[1]) * (r[0] - p[0]);

@@ -1,11 +1,11 @@
 import type { Manifold } from 'manifold-3d';
+import { convexHull } from '../../polyhedron/polygon.ts';
 import type { Outline } from '../../rods/axis-symbol.ts';
 import { ObjectError } from '../../shape/object-error.ts';
 import type { ClosedShape } from '../../shape/shape.ts';
 import type { Workbench } from '../kit.ts';
 import type { Point } from '../lettering/field.ts';
 import { sidesOf } from '../lettering/fit-box.ts';
-import { convexOutline } from '../lettering/flat-outline.ts';
 import type { Mesh } from '../mesh.ts';
 import { times, type Vector, vectorAt } from '../vectors.ts';
 import { inStance, type Stance, stanceOf } from './attitude.ts';
@@ -46,7 +46,7 @@ export function cradleFor(bench: Workbench, shape: ClosedShape, scale: number, o
   const rim = low + hold;
   const room = liftRoom(shape, scale, stance.up, clearance, rim + ABOVE);
   const corners = pointsOf(room.positions).map((p) => inStance(stance, p));
-  const opening = convexOutline(corners.map(([x, y]): Point => [x, y]));
+  const opening = convexHull(corners.map(([x, y]): Point => [x, y]));
   assertSteady(opening, inStance(stance, times(shape.measures.centroid, scale)), hold);
   const lowRods = rods.filter((rod) => lowestOf(rod, stance.up) - clearance < rim);
   const lift = rim + ABOVE - Math.min(low, ...rods.map((rod) => lowestOf(rod, stance.up))) + 2 * clearance;
@@ -55,7 +55,7 @@ export function cradleFor(bench: Workbench, shape: ClosedShape, scale: number, o
   return {
     stance,
     outline: widened(opening, wall),
-    shadow: convexOutline([...body.map(([x, y]): Point => [x, y]), ...rods.flatMap((rod) => footOf(rod, stance))]),
+    shadow: convexHull([...body.map(([x, y]): Point => [x, y]), ...rods.flatMap((rod) => footOf(rod, stance))]),
     rooms: [
       turned(bench.solid(withoutSurface(room))),
       ...lowRods.map((rod) => turned(rodSlot(bench, rod, stance.up, clearance, lift))),
@@ -100,7 +100,7 @@ export const stanceMatrix = ({ right: r, away: a, up: u }: Stance): Parameters<W
 
 /** A convex outline with material of this thickness around it: its corners rounded, its sides moved out. */
 const widened = (outline: readonly Point[], by: number): Point[] =>
-  convexOutline(outline.flatMap((corner) => circle(corner, by)));
+  convexHull(outline.flatMap((corner) => circle(corner, by)));
 
 const ROUND = 24;
 

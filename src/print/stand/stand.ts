@@ -129,7 +129,7 @@ function partsOf(
     mesh,
     placed: [backFrom(mesh, toStand)],
   });
-  const purpose = 'the stand that holds the crystal upright';
+  const purpose = 'the stand that holds the crystal';
   if (!contrast) {
     const inked = [...letters, ...codes].map((solid) => bench.solid(bench.mesh(solid, 1)));
     return [part('stand', purpose, bench.mesh(bench.union([ground, ...inked]), 0), [stand, ink])];

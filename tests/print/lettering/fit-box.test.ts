@@ -1,9 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { convexHull } from '../../../src/polyhedron/polygon.ts';
 import type { Side } from '../../../src/print/lettering/box-room.ts';
 import type { Point } from '../../../src/print/lettering/field.ts';
 import { fitBox, sidesOf } from '../../../src/print/lettering/fit-box.ts';
-import { convexOutline } from '../../../src/print/lettering/flat-outline.ts';
 
 const BOX = { width: 3, height: 1 };
 const ALL = { least: 0, enough: Number.POSITIVE_INFINITY };
@@ -40,7 +40,7 @@ const polygons = fc
     minLength: 3,
     maxLength: 12,
   })
-  .map((points) => convexOutline(points.map(([x, y]): Point => [x / 5, y / 5])))
+  .map((points) => convexHull(points.map(([x, y]): Point => [x / 5, y / 5])))
   .filter((polygon) => polygon.length >= 3);
 
 describe('the largest box in a convex polygon', () => {
