@@ -1,3 +1,4 @@
+import { either } from '../recipe/either.ts';
 /** Exit codes of the command line. */
 export const EXIT = { done: 0, atFault: 1, wrongUse: 2 } as const;
 
@@ -49,6 +50,6 @@ export async function naming<T>(what: string, step: () => Promise<T> | T): Promi
 /** @throws UsageError unless the word is one of those that the flag knows */
 export function oneOf<T extends string>(flag: string, word: string, known: readonly T[]): T {
   const found = known.find((one) => one === word);
-  if (found === undefined) throw new UsageError(`${flag} is ${known.join(' or ')}, not "${word}".`);
+  if (found === undefined) throw new UsageError(`${flag} is ${either(known)}, not "${word}".`);
   return found;
 }

@@ -1,15 +1,19 @@
 import { parseFace, readOptions } from '../crystal/indices.ts';
 import type { PointGroup } from '../crystal/point-group.ts';
 import type { BluntPlan, BodyPlan, LettersPlan, PlanesPlan, StandPlan } from './crystal.ts';
-import { bounded } from './print-plan.ts';
+import { bounded, under } from './print-plan.ts';
 import { type Millimetres, mm, readLength } from './quantity.ts';
 import type { BaseInput, BluntInput, BodyInput, FaceInput, LettersInput, PlanesInput, StandInput } from './schema.ts';
 
 /** Rounding when blunting is asked for without a figure: ideal corners then reach at most 0.20 mm into the gauge. */
 const USUAL_RADIUS = mm(0.75);
 
-const lengthOr = <T>(value: number | string | undefined, otherwise: T): Millimetres | T =>
-  value === undefined ? otherwise : bounded(readLength(value), 'a length');
+/** @param key of the value, for the error about it; the value may also stand without one */
+const lengthOr = <T>(value: number | string | undefined, otherwise: T, key?: string): Millimetres | T => {
+  if (value === undefined) return otherwise;
+  const read = (): Millimetres => bounded(readLength(value), 'a length');
+  return key === undefined ? read() : under(key, read);
+};
 
 /** @throws CrystalError, QuantityError */
 export function readBody(input: BodyInput, group: PointGroup | undefined): BodyPlan {
@@ -19,11 +23,11 @@ export function readBody(input: BodyInput, group: PointGroup | undefined): BodyP
       return { kind: 'solid' };
     case 'hollow': {
       const { wall, drains = null } = 'wall' in given || 'drains' in given ? given : {};
-      return { kind: 'hollow', wall: lengthOr(wall, null), drains };
+      return { kind: 'hollow', wall: lengthOr(wall, null, 'wall'), drains };
     }
     case 'frame': {
       const { strut, bead = false } = 'strut' in given || 'bead' in given ? given : {};
-      return { kind: 'frame', strut: lengthOr(strut, null), bead };
+      return { kind: 'frame', strut: lengthOr(strut, null, 'strut'), bead };
     }
     case 'halves': {
       const {
@@ -39,7 +43,7 @@ export function readBody(input: BodyInput, group: PointGroup | undefined): BodyP
     }
     case 'skins': {
       const { depth } = 'depth' in given ? given : {};
-      return { kind: 'skins', depth: lengthOr(depth, null) };
+      return { kind: 'skins', depth: lengthOr(depth, null, 'depth') };
     }
     case 'units': {
       const { gap } = 'gap' in given ? given : {};
@@ -50,7 +54,7 @@ export function readBody(input: BodyInput, group: PointGroup | undefined): BodyP
 
 /** A gap may be nothing: pieces then fill the crystal exactly. */
 const gapOf = (value: number | string | undefined): Millimetres | null =>
-  value !== undefined && readLength(value) === 0 ? mm(0) : lengthOr(value, null);
+  value !== undefined && readLength(value) === 0 ? mm(0) : lengthOr(value, null, 'gap');
 
 const faceOf = (input: FaceInput, group: PointGroup | undefined) =>
   parseFace(Array.isArray(input) ? input : String(input), readOptions(group?.axes ?? 'hexagonal'));
@@ -66,8 +70,8 @@ export function readBlunt(input: BluntInput): BluntPlan | null {
   if (input === false) return null;
   if (typeof input !== 'object')
     return { kind: 'round', radius: lengthOr(input === true ? undefined : input, USUAL_RADIUS) };
-  if (input.bevel !== undefined) return { kind: 'bevel', width: lengthOr(input.bevel, USUAL_RADIUS) };
-  return { kind: 'round', radius: lengthOr(input.radius, USUAL_RADIUS) };
+  if (input.bevel !== undefined) return { kind: 'bevel', width: lengthOr(input.bevel, USUAL_RADIUS, 'bevel') };
+  return { kind: 'round', radius: lengthOr(input.radius, USUAL_RADIUS, 'radius') };
 }
 
 /** @throws CrystalError */
@@ -85,7 +89,7 @@ export function readPlanes(input: PlanesInput): PlanesPlan | null {
   const { relief = 'engraved', width, depth } = typeof input === 'object' ? input : {};
   return {
     relief: typeof input === 'string' ? input : relief,
-    width: lengthOr(width, null),
-    depth: lengthOr(depth, null),
+    width: lengthOr(width, null, 'width'),
+    depth: lengthOr(depth, null, 'depth'),
   };
 }

@@ -64,6 +64,12 @@ export function readAxes(input: AxesInput, group: PointGroup | undefined, usualD
   if (input === false) return null;
   const given: AxesObject = typeof input === 'object' && !Array.isArray(input) ? input : choiceOf(input);
   const { depth } = given;
+  if (depth !== undefined && given.fit !== 'press' && given.fit !== 'slide')
+    throw new QuantityError(
+      'a depth is that of bores for bought metal rod, and these rods are printed.',
+      'Add fit: press or fit: slide, or leave the depth out.',
+      'depth',
+    );
   const unknown = given.orders?.find((order) => ![2, 3, 4, 6, -3, -4, -6].includes(order));
   if (unknown !== undefined)
     throw new QuantityError(
@@ -112,7 +118,7 @@ export function choiceOf(
 const CHOICES = 'Write all, orders such as 3,2 or -4, or directions such as "[001],[110]".';
 
 /** Names the key whose value is being read in the error about it. */
-function under<T>(key: string, step: () => T): T {
+export function under<T>(key: string, step: () => T): T {
   try {
     return step();
   } catch (error) {

@@ -2,6 +2,7 @@ import { nearest } from '../crystal/nearest.ts';
 import type { PointGroup } from '../crystal/point-group.ts';
 import { readBase, readBlunt, readBody, readLetters, readPlanes, readStand } from './body-plan.ts';
 import type { BluntPlan, BodyPlan, LettersPlan, PlanesPlan, PrintPlan, StandPlan } from './crystal.ts';
+import { either } from './either.ts';
 import { readAxes, readSize } from './print-plan.ts';
 import type { ProblemList } from './problem-list.ts';
 import type {
@@ -14,7 +15,7 @@ import type {
   RecipeInput,
   StandInput,
 } from './schema.ts';
-import { either, preset, type Shelf } from './shelf.ts';
+import { preset, type Shelf } from './shelf.ts';
 
 const USUAL_PRINTER = 'fdm-0.4';
 

@@ -1,5 +1,6 @@
 import { nearest } from '../crystal/nearest.ts';
 import { SETTINGS } from '../crystal/setting.ts';
+import { either } from './either.ts';
 import { type Problem, RecipeError } from './problem.ts';
 import type { MineralPreset, PrinterProfile, SetPreset } from './schema.ts';
 import { readText, type Written } from './text.ts';
@@ -85,11 +86,6 @@ export const unknownHabit = (mineral: string, habit: string, known: readonly str
   message: `${mineral} has no habit "${habit}" here.`,
   hint: `It has ${either(known, 'and')}.`,
 });
-
-/** "a, b or c". */
-export function either(words: readonly string[], joint: 'or' | 'and' = 'or'): string {
-  return words.length < 2 ? (words[0] ?? 'nothing') : `${words.slice(0, -1).join(', ')} ${joint} ${words.at(-1)}`;
-}
 
 const guess = (near: readonly string[], otherwise: string): string =>
   near.length > 0 ? `Did you mean ${either(near)}? ${otherwise}` : otherwise;

@@ -1,5 +1,6 @@
 import type { z } from 'zod';
 import { nearest } from '../crystal/nearest.ts';
+import { either } from './either.ts';
 import type { Path, Problem } from './problem.ts';
 import { KNOWN_KEYS, LONGEST_TITLE, MOST_FORMS, recipeSchema } from './schema.ts';
 
@@ -25,7 +26,7 @@ function toProblems(issue: Issue, root: unknown): Problem[] {
         {
           code: 'wrong-kind',
           message: `${told(valueAt(root, path))} is not one of the words known here.`,
-          hint: `Use ${issue.values.map(String).join(' or ')}.`,
+          hint: `Use ${either(issue.values.map(String))}.`,
           path,
         },
       ];
@@ -53,15 +54,19 @@ function unknownKey(path: Path, key: string): Problem {
   };
 }
 
+/** Whether this way to write a value is for values of another type, or for keys under another `kind`. */
+const isAnotherKind = ({ code, path }: Issue): boolean =>
+  (code === 'invalid_type' || code === 'invalid_value') && (path.length === 0 || path.join() === 'kind');
+
 /** Of the ways to write a value, the one that its own keys point at; for plain values a general sentence. */
 function bestOfUnion(errors: readonly (readonly Issue[])[], path: Path, root: unknown): Problem {
-  const nested = errors
-    .filter((issues) => issues.every(({ code }) => code !== 'invalid_type') || issues.some((i) => i.path.length > 0))
-    .sort((a, b) => a.length - b.length)[0];
-  const [issue] = nested ?? [];
+  const ofItsKind = errors
+    .filter((issues) => !issues.some((issue) => isAnotherKind(issue)))
+    .sort((a, b) => a.length - b.length);
+  const issue = ofItsKind[0]?.[0];
   if (issue && typeof valueAt(root, path) === 'object') {
     const inner = toProblems({ ...issue, path: [...path, ...issue.path] }, root)[0];
-    if (inner && inner.code !== 'wrong-kind') return inner;
+    if (inner && (inner.code !== 'wrong-kind' || ofItsKind.length === 1)) return inner;
   }
   return wrongKind(path, root);
 }
@@ -126,6 +131,12 @@ const EXPECTED: Readonly<Record<string, string>> = {
   planes: 'engraved, raised or inlaid, or { relief: raised, width: 1.2, depth: 0.6 }',
   stand: 'true, or keys such as { text: [Quartz, SiO2], braille: true }',
   files: 'a list of stl, 3mf, glb, png',
+  depth: 'a length such as 0.6 or "2 mm"',
+  width: 'a length such as 0.6 or "2 mm"',
+  wall: 'a length such as 2 or "2 mm"',
+  strut: 'a length such as 2 or "2 mm"',
+  gap: 'a length such as 0.4 or "0.4 mm"',
+  offset: 'a number of millimetres, negative for the far side of the centre',
   orders: 'a list of 2, 3, 4, 6 (negative: only rotoinversion axes)',
   directions: 'a list such as ["[001]", "[110]"]',
   fit: 'fused, separate, or press or slide for bought metal rod',
