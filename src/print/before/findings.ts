@@ -163,35 +163,38 @@ function durationOf(seconds: number): string {
   return `${Math.floor(minutes / 60)} h ${minutes % 60} min`;
 }
 
-function edgeFinding({ solid, measures }: ClosedShape, scale: number, { feature }: PrintingProfile): PrintingFinding {
+function edgeFinding({ solid, measures }: ClosedShape, scale: number, profile: PrintingProfile): PrintingFinding {
   const lengths = edges(solid, measures).map(({ length }) => length * scale);
-  const least = lengths.reduce((low, length) => Math.min(low, length), Number.POSITIVE_INFINITY);
-  const below = lengths.filter((length) => length < feature).length;
-  return {
-    code: 'short-edge',
-    severity: below > 0 ? 'warning' : 'note',
-    part: null,
-    measured: least,
-    figure: feature,
-    unit: 'mm',
-    source: DESIGN_GUIDES,
-    text: `The crystal's shortest edge is ${least.toFixed(2)} mm${lost(below, 'edge', feature)}`,
-  };
+  return featureFinding('short-edge', lengths, profile, (least, below, feature) => {
+    return `The crystal's shortest edge is ${least} mm${lost(below, 'edge', feature)}`;
+  });
 }
 
-function faceFinding(shape: ClosedShape, scale: number, { feature }: PrintingProfile): PrintingFinding {
+function faceFinding(shape: ClosedShape, scale: number, profile: PrintingProfile): PrintingFinding {
   const widths = shape.measures.faces.map((face) => narrowestFace(shape, face) * scale);
-  const least = widths.reduce((low, width) => Math.min(low, width), Number.POSITIVE_INFINITY);
-  const below = widths.filter((width) => width < feature).length;
+  return featureFinding('narrow-face', widths, profile, (least, below, feature) => {
+    return `The crystal's narrowest face is ${least} mm wide${lost(below, 'face', feature)}`;
+  });
+}
+
+/** The least of some sizes, and how many do not come out in print. */
+function featureFinding(
+  code: 'short-edge' | 'narrow-face',
+  sizes: readonly number[],
+  { feature }: PrintingProfile,
+  text: (least: string, below: number, feature: number) => string,
+): PrintingFinding {
+  const least = sizes.reduce((low, size) => Math.min(low, size), Number.POSITIVE_INFINITY);
+  const below = sizes.filter((size) => size < feature).length;
   return {
-    code: 'narrow-face',
+    code,
     severity: below > 0 ? 'warning' : 'note',
     part: null,
     measured: least,
     figure: feature,
     unit: 'mm',
     source: DESIGN_GUIDES,
-    text: `The crystal's narrowest face is ${least.toFixed(2)} mm wide${lost(below, 'face', feature)}`,
+    text: text(least.toFixed(2), below, feature),
   };
 }
 
