@@ -16,12 +16,14 @@ import type { Step } from './solid-body.ts';
 
 /** Heights of letters on faces, millimetres: legible at arm's length, and no larger than a key letter needs to be. */
 const HEIGHT = { smallest: 3, largest: 12 };
-/** From letters to the edges of their face. */
+/** From letters to the edges of their face, millimetres. */
 const MARGIN = 1;
 
 interface Lettering {
   readonly printer: PrinterProfile;
   readonly typeface: Typeface;
+  /** What blunting took of the faces from their edges, millimetres. */
+  readonly inset: number;
   readonly avoid: readonly RodExit[];
   /** Mirror planes as lines on the surface. */
   readonly strips: readonly SurfaceLine[];
@@ -73,8 +75,8 @@ export function baseLettered(
   return { solid, word: 'with text under its resting face', inlay: null, remarks: [remark] };
 }
 
-function styleOf(relief: ReliefPlan, { printer, typeface }: Omit<Lettering, 'avoid' | 'strips'>): LetterStyle {
+function styleOf(relief: ReliefPlan, { printer, typeface, inset }: Omit<Lettering, 'avoid' | 'strips'>): LetterStyle {
   const { stroke, depth } = relief === 'raised' ? printer.raised : printer.engraved;
   const cut = relief === 'raised' ? 'raised' : 'engraved';
-  return { typeface, relief: cut, depth, stroke, height: HEIGHT, margin: MARGIN, wall: printer.usualWall };
+  return { typeface, relief: cut, depth, stroke, height: HEIGHT, margin: MARGIN + inset, wall: printer.usualWall };
 }

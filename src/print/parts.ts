@@ -83,7 +83,7 @@ function refuseMixtures({ body, axes, letters, blunt, stand, base, planes, key }
     );
   if (body.kind === 'solid') return;
   const apart = body.kind !== 'frame';
-  const with_ = [
+  const besides = [
     ...(axes && (apart || forMetal(axes)) ? ['axes'] : []),
     ...(letters ? ['letters'] : []),
     ...(base ? ['text under it'] : []),
@@ -91,7 +91,7 @@ function refuseMixtures({ body, axes, letters, blunt, stand, base, planes, key }
     ...(blunt ? ['blunting'] : []),
     ...(stand && body.kind !== 'hollow' && body.kind !== 'skins' ? ['a stand'] : []),
   ];
-  if (with_.length === 0) return;
-  const message = `a body of kind ${body.kind} is not made together with ${with_.join(' and ')}`;
+  if (besides.length === 0) return;
+  const message = `a body of kind ${body.kind} is not made together with ${besides.join(' and ')}`;
   throw new ObjectError('not-together', message, 'make two models: one with body solid, one with this body');
 }

@@ -53,14 +53,20 @@ export function solidBody(
   let work: Work = { solid, inlays: [], words: ['the crystal'], parts: [], remarks };
   const { planes } = print;
   if (planes && tools.planes)
-    work = with_(work, tools.planes.mirrorLined(bench, work.solid, shape, scale, planes, printer));
+    work = after(work, tools.planes.mirrorLined(bench, work.solid, shape, scale, planes, printer));
   if (tools.letters && tools.typeface) {
     const strips = planes && tools.planes ? tools.planes.stripsOf(shape, planes, printer) : [];
-    const lettering = { printer, typeface: tools.typeface, avoid: axes ? exitsOf(shape, axes) : [], strips };
+    const lettering = {
+      printer,
+      typeface: tools.typeface,
+      inset: print.blunt && tools.blunting ? tools.blunting.bluntedInset(shape, print.blunt) : 0,
+      avoid: axes ? exitsOf(shape, axes) : [],
+      strips,
+    };
     const { lettered, baseLettered } = tools.letters;
     const { letters, base } = print;
-    if (letters) work = with_(work, lettered(bench, work.solid, shape, scale, letters, base !== null, lettering));
-    if (base) work = with_(work, baseLettered(bench, work.solid, shape, scale, base, lettering));
+    if (letters) work = after(work, lettered(bench, work.solid, shape, scale, letters, base !== null, lettering));
+    if (base) work = after(work, baseLettered(bench, work.solid, shape, scale, base, lettering));
   }
   if (axes && tools.metal) {
     const cut = (one: Manifold) => tools.metal!.boredForMetal(bench, one, shape, scale, axes, printer);
@@ -92,7 +98,7 @@ export interface Step {
   readonly remarks: readonly string[];
 }
 
-const with_ = (work: Work, { solid, word, inlay, remarks }: Step): Work => ({
+const after = (work: Work, { solid, word, inlay, remarks }: Step): Work => ({
   ...work,
   solid,
   inlays: inlay ? [...work.inlays, inlay] : work.inlays,

@@ -1,6 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { type Made, make } from '../../src/index.ts';
-import { meshVolume } from '../../src/print/mesh.ts';
+import { type Mesh, meshVolume } from '../../src/print/mesh.ts';
+import { cross, dot, length, minus, vectorAt } from '../../src/print/vectors.ts';
+import { type FacePlane, facePlanes } from '../../src/shape/face-planes.ts';
 import { ObjectError } from '../../src/shape/object-error.ts';
 import { type Print, spreadMinerals } from './object-options.ts';
 
@@ -93,3 +95,36 @@ describe('text under the resting face', () => {
     await expect(make({ mineral: 'fluorite', print })).rejects.toThrow(/room for ".*" in letters of \d\.\d mm only/);
   });
 });
+
+describe('letters on a blunted crystal', () => {
+  it.each(['quartz', 'calcite', 'topaz', 'fluorite'])(
+    'of %s stand wholly on what is left of the faces',
+    async (mineral) => {
+      for (const blunt of ['1.5 mm', { bevel: 2 }] as const) {
+        const { parts, shape, millimetresPerUnit } = await make({
+          mineral,
+          print: { size: 40, blunt, letters: 'inlaid', printer: 'sla' },
+        });
+        const letters = parts.find(({ name }) => name === 'face-letters')!.placed[0]!;
+        // A straight prism holds its floor times its depth; one that stands half on a rounding holds less.
+        const floors = facePlanes(shape, millimetresPerUnit).map((plane) => areaIn(letters, plane, DEPTH));
+        const ratio = meshVolume(letters) / (DEPTH * floors.reduce((a, b) => a + b));
+        expect(Math.abs(ratio - 1), JSON.stringify(blunt)).toBeLessThan(1e-3);
+      }
+    },
+  );
+});
+
+/** Of engraved letters in presets/printers/sla.yaml, millimetres. */
+const DEPTH = 0.5;
+
+/** Area of the triangles that lie so far under a face. */
+function areaIn({ positions, triangles }: Mesh, { normal, distance }: FacePlane, under: number): number {
+  let area = 0;
+  for (let t = 0; t < triangles.length; t += 3) {
+    const [a, b, c] = [0, 1, 2].map((i) => vectorAt(positions, triangles[t + i]!));
+    const isIn = [a!, b!, c!].every((corner) => Math.abs(dot(normal, corner) - distance + under) < 1e-3);
+    if (isIn) area += length(cross(minus(b!, a!), minus(c!, a!))) / 2;
+  }
+  return area;
+}
